@@ -47,6 +47,7 @@ export class AvailabilityGrid implements ControlValueAccessor {
   readonly slots = input<readonly string[] | null>(null);
   /** Slots of the other side, outlined in their colour, so that the overlap shows. */
   readonly others = input<readonly string[]>([]);
+  readonly othersLabel = input('the other side');
 
   protected readonly parts = DAY_PARTS.map((part) => ({ part, ...PART_IN_WORDS[part] }));
   protected readonly days = DAYS.map((day) => ({ day, name: DAY_IN_WORDS[day], short: DAY_IN_WORDS[day].slice(0, 3) }));

@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { FitCriterion, layOutStrip, stripLength } from './strip-layout';
 
-const LETTER_WIDTH = 6.2;
+const LETTER_WIDTH = 6.6;
 
 /** Names the cells of the fit strips below it; each name is cut to its cell and whole in the text alternative. */
 @Component({
@@ -28,7 +28,7 @@ export class FitStripHeader {
       return {
         x: cell.x,
         label: criterion?.label ?? '',
-        text: name.slice(0, Math.max(1, cell.width / LETTER_WIDTH)).trim(),
+        text: name.slice(0, Math.max(1, Math.floor((cell.width - 3) / LETTER_WIDTH))).trim(),
       };
     }),
   );

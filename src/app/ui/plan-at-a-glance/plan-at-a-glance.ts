@@ -9,7 +9,7 @@ import { PlanTable } from './plan-table';
 export type { PlanGroup, PlanMentee, PlanPlace } from './plan-layout';
 
 // Marks are sized for this width and do not grow beyond; narrower cards get the bundled picture.
-const REFERENCE_WIDTH = 1000;
+const REFERENCE_WIDTH = 1080;
 
 /**
  * The whole plan in one picture: mentees above, places below, one thread a pairing. Pointing at or moving to a mark
@@ -27,6 +27,7 @@ export class PlanAtAGlance {
   /** Key of the group to which the page has filtered. */
   readonly chosenGroup = input<string | null>(null);
   readonly threadLimit = input(600);
+  readonly heading = input('Plan at a glance');
   /** The key of the mentee whose thread was chosen by click or Enter. */
   readonly selected = output<string>();
   /** The key of the group that was chosen; null when the chosen one was chosen again. */
@@ -40,7 +41,7 @@ export class PlanAtAGlance {
     () => this.layout().threads.length > this.threadLimit() || this.layout().mentees.length > 2 * this.threadLimit(),
   );
   protected readonly radius = computed(() =>
-    Math.max(1.5, Math.min(4.5, (0.4 * this.layout().pitch * REFERENCE_WIDTH) / 100)),
+    Math.max(1.5, Math.min(4.5, (0.43 * this.layout().pitch * REFERENCE_WIDTH) / 100)),
   );
   protected readonly summary = computed(() => {
     const mentees = this.layout().mentees.length;

@@ -34,8 +34,8 @@ export interface BundleLayout {
   readonly height: number;
 }
 
-export const ROW_HEIGHT = 56;
-const TALLEST = 44;
+export const ROW_HEIGHT = 64;
+const TALLEST = 50;
 
 /** One row a group, mentees left and places right; all threads between two groups become one band as thick as they are many. */
 export function bundlePlan(groups: readonly PlanGroup[]): BundleLayout {

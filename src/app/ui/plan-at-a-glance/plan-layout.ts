@@ -71,14 +71,15 @@ export const ROWS = { mentees: 16, places: 168, height: 184 } as const;
 
 // Groups stand at least as far apart as this many marks.
 const GAP = 2.4;
-const LETTER_WIDTH = 6.9;
+const LETTER_WIDTH = 6.8;
 // Labels must fit from this width on; below it the picture is bundled anyway.
-const NARROWEST = 760;
+const NARROWEST = 960;
 
 /**
  * Lays the plan out in two rows of marks, grouped, mentees above and places below, each group's rows centred on one
- * another. Within a group, pairings that leave it to the left come first and those left out last; places follow the
- * order of their mentees, so that threads cross only where a pairing leaves its group.
+ * another. Within a group, pairings that leave it to the left come first, then its own from the best fit to the weakest,
+ * then those that leave to the right, and those left out last. Places follow the order of their mentees, so that threads
+ * cross only where a pairing leaves its group.
  */
 export function layOutPlan(groups: readonly PlanGroup[]): PlanLayout {
   const groupOfServing = servingGroups(groups);
@@ -113,7 +114,7 @@ export function layOutPlan(groups: readonly PlanGroup[]): PlanLayout {
       return served === undefined ? Number.POSITIVE_INFINITY : served;
     };
     const inOrder = group.mentees.map((mentee, order) => ({ mentee, order, rank: rank(mentee) }));
-    inOrder.sort((a, b) => compare(a.rank, b.rank) || a.order - b.order);
+    inOrder.sort((a, b) => compare(a.rank, b.rank) || (b.mentee.fit ?? 0) - (a.mentee.fit ?? 0) || a.order - b.order);
     inOrder.forEach(({ mentee }, column) => {
       const mentorName = mentee.mentorKey === null ? null : (mentorNames.get(mentee.mentorKey) ?? null);
       mentees.push({ ...mentee, x: xOf(column, inOrder.length), group: at, mentorName });

@@ -46,9 +46,10 @@ export class TradeOffCurve {
     const fits = this.sorted().map((point) => point.meanFit / 100);
     const low = Math.min(...fits, 100);
     const high = Math.max(...fits, 0);
-    const air = Math.max(1, (high - low) * 0.15);
+    const span = Math.max(2, high - low);
+    // more air below than above: the words of the current point stand there
     return scaleLinear()
-      .domain(fits.length > 0 ? [low - air, high + air] : [0, 100])
+      .domain(fits.length > 0 ? [low - span * 0.3, high + span * 0.1] : [0, 100])
       .nice(4)
       .range([HEIGHT, TOP]);
   });
