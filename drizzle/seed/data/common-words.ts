@@ -10,12 +10,12 @@ export const MENTEE_OPENING: Record<CareerStage, readonly string[]> = {
     'I am writing my thesis and asking myself what comes after it.',
   ],
   graduate: [
-    'I started work a year ago.',
+    'I started work not long ago.',
     'This is my second job and the first in which I may decide things.',
     'I am past the stage of carrying the tripod, though not by much.',
     'Since I graduated I have moved between three teams.',
     'I am new enough to ask and old enough to be expected to know.',
-    'My first two years in practice went by in one long field season.',
+    'My time in practice so far has been one long field season.',
   ],
   candidate: [
     'I hope to become chartered within the next two years.',
@@ -178,6 +178,26 @@ export const MENTEE_LIMITS: readonly string[] = [
   'Evenings are difficult until the children are asleep.',
   'I share an office, so calls need a little planning.',
   'I cannot take on extra project work at present.',
+  'Mondays are full of site meetings.',
+  'I am slow to answer messages and quick to answer calls.',
+  'I would like to keep my employer’s tenders out of our talks.',
+  'Long trips are difficult for me at present.',
+  'I sing in a choir on Tuesdays and do not give that up.',
+  'I look after my mother at weekends.',
+  'I cannot promise the same day every month.',
+  'From May to September I depend on the weather.',
+  'I do not wish to discuss pay.',
+  'I am no good with shared calendars and will need reminding.',
+];
+
+export const STUDENT_LIMITS: readonly string[] = [
+  'I have examinations in January and June.',
+  'I do not drive, so I depend on trains and ferries.',
+  'I work in a café at weekends.',
+  'I know little of everyday practice yet and will ask simple things.',
+  'In the summer I am away on a placement.',
+  'My timetable changes every term.',
+  'I share a small flat, so calls need a little planning.',
 ];
 
 /** How a mentee frames a goal for one cycle; the goal itself follows "I want to". */

@@ -49,6 +49,7 @@ export class PersonWriter {
       newcomer: language !== 'en' && language !== 'da',
       academic: placement.sector === 'academic',
       independent: placement.sector === 'self-employed',
+      privateFirm: placement.sector === 'private',
     };
     const seeksTopics = plan.side === 'mentor' ? [] : soughtTopics(luck, plan, background);
     const offersTopics = plan.side === 'mentee' ? [] : offeredTopics(luck, plan, background);

@@ -65,6 +65,8 @@ export interface Background {
   academic: boolean;
   /** Has a practice of their own. */
   independent: boolean;
+  /** Works for a private firm, which somebody may take over one day. */
+  privateFirm: boolean;
 }
 
 const DESK_AREAS: readonly PracticeAreaSlug[] = ['land-valuation', 'planning-and-consents', 'gis-and-data'];
@@ -77,7 +79,8 @@ export function soughtTopics(luck: Chance, plan: Blueprint, who: Background): st
   const general = Object.entries(TOPIC_HABITS)
     .filter(([slug, habit]) => habit.soughtBy.includes(plan.stage) && (slug !== 'new-in-ellmark' || who.newcomer))
     .map(([slug]) => slug)
-    .filter((slug) => !FIELD_TOPICS.includes(slug) || !atDesk(plan.seeks[0]));
+    .filter((slug) => !FIELD_TOPICS.includes(slug) || !atDesk(plan.seeks[0]))
+    .filter((slug) => slug !== 'succession' || who.privateFirm);
   const own = plan.seeks[0] === undefined || luck.happens(0.6) ? [] : luck.sample(topicsOf(plan.seeks[0]), 1);
   return [...new Set([...own, ...drawTopics(luck, luck.between(1, 3), asWeighted(general))])];
 }
@@ -189,7 +192,7 @@ export function drawPlacement(luck: Chance, plan: Blueprint, mailName: string, f
   if (plan.side !== 'mentee' && plan.years >= 33 && luck.happens(0.5)) {
     return { employer: '', domain: 'ellmark-members.example', sector: 'self-employed', town };
   }
-  if (plan.years >= 9 && plan.side !== 'both' && luck.happens(0.2)) {
+  if (plan.years >= 9 && plan.side === 'mentor' && luck.happens(0.2)) {
     const word = luck.pick(['Survey', 'Land Survey', 'Surveying', 'Measured Survey', 'Consulting']);
     const last = mailName.split('.').at(-1) ?? mailName;
     return { employer: `${family} ${word}`, domain: `${slug(last)}-survey.example`, sector: 'self-employed', town };

@@ -14,6 +14,7 @@ import {
   MODE_SENTENCE,
   STYLE_HABIT,
   STYLE_OPENING,
+  STUDENT_LIMITS,
 } from './common-words';
 import type { Chance } from './random';
 import type { PracticeAreaSlug } from './tags';
@@ -43,7 +44,23 @@ export class TextLedger {
   }
 }
 
-const upperFirst = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
+const SMALL_NUMBERS = [
+  'no',
+  'one',
+  'two',
+  'three',
+  'four',
+  'five',
+  'six',
+  'seven',
+  'eight',
+  'nine',
+  'ten',
+  'eleven',
+  'twelve',
+];
+const inWords = (count: number): string => SMALL_NUMBERS[count] ?? String(count);
+
 /** Lower-cases the first letter, but leaves abbreviations such as GIS alone. */
 const lowerFirst = (text: string): string =>
   /^[A-Z][a-z]/.test(text) ? text.charAt(0).toLowerCase() + text.slice(1) : text;
@@ -64,7 +81,7 @@ export function writeHeadline(luck: Chance, facts: Facts): string {
     candidate: [
       `${title}, candidate for chartership; ${work}`,
       `${title}: ${work}`,
-      `${upperFirst(work)}, in ${facts.town}`,
+      `${title} in ${facts.town}: ${work}`,
     ],
     chartered: [
       `${title}: ${work}`,
@@ -72,8 +89,8 @@ export function writeHeadline(luck: Chance, facts: Facts): string {
       `${title} at ${facts.employer}; ${work}`,
     ],
     senior: [
-      `${title} of ${facts.years} years: ${work}`,
-      `${upperFirst(work)}, for ${facts.years} years`,
+      `Senior surveyor in ${facts.town}; ${work}`,
+      `${title} with ${inWords(facts.years)} years in practice: ${work}`,
       `${title}, ${facts.town}: ${work}`,
       `Principal surveyor; ${work}`,
     ],
@@ -108,7 +125,7 @@ function mentorHopes(luck: Chance, facts: Facts): string {
   const [first = '', second = ''] = luck.sample(AREA_WORDS[facts.area].teach, 2);
   const [lead, join] = luck.pick(TALK);
   return [
-    luck.pick(MENTOR_OPENING).replace('{years}', String(facts.years)),
+    luck.pick(MENTOR_OPENING).replace('{years}', inWords(facts.years)),
     luck.happens(0.5) ? `${lead} ${first}.` : `${lead} ${first}, ${join} ${second}.`,
     topicSentence(luck, facts.offersTopics, 'offer'),
     luck.pick(MENTOR_CLOSING),
@@ -132,9 +149,10 @@ export function writeStyle(luck: Chance, facts: Facts): string {
 }
 
 export function writeLimits(luck: Chance, facts: Facts): string {
-  const general = luck.pick(facts.side === 'mentee' ? MENTEE_LIMITS : GENERAL_LIMITS);
-  if (facts.side === 'mentee') return `${general} ${luck.pick(MENTEE_LIMITS.filter((each) => each !== general))}`;
-  return `${luck.pick(AREA_WORDS[facts.area].limits)} ${general}`;
+  if (facts.side === 'mentee') {
+    return luck.sample(facts.stage === 'student' ? STUDENT_LIMITS : MENTEE_LIMITS, 2).join(' ');
+  }
+  return `${luck.pick(AREA_WORDS[facts.area].limits)} ${luck.pick(GENERAL_LIMITS)}`;
 }
 
 /** A mentee's goals for one cycle. */
@@ -147,7 +165,7 @@ export function writeMenteeGoals(luck: Chance, facts: Facts): string {
 
 const MENTOR_OFFER: readonly (readonly [before: string, after: string])[] = [
   ['I would start with', '.'],
-  ['We could begin with', ' and see where it leads.'],
+  ['We could begin with', ', and see where it leads.'],
   ['If it is about', ', all the better.'],
   ['I have most to give on', '.'],
 ];

@@ -188,7 +188,7 @@ export const TOPIC_WORDS: Record<string, TopicWords> = {
   'running-a-practice': {
     seek: [
       'I think about starting on my own and would like an honest talk about it.',
-      'I share a small practice with a friend, and we make it up as we go.',
+      'A friend and I talk about a practice of our own, and I wonder what we overlook.',
     ],
     offer: ['I started with one instrument and a borrowed van.', 'I am open about figures, including the bad years.'],
   },
@@ -291,8 +291,8 @@ export const TOPIC_WORDS: Record<string, TopicWords> = {
   },
   succession: {
     seek: [
-      'I may take over the practice I work in and do not know how to talk about it.',
-      'My partner retires in two years and we have no plan.',
+      'I may one day take over the firm I work in and do not know how to talk about it.',
+      'Our senior partner retires in two years, and nobody mentions it.',
     ],
     offer: [
       'I am handing my own practice over, slowly, and can tell you how it goes.',
