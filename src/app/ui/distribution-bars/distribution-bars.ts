@@ -41,6 +41,17 @@ export class DistributionBars {
       y: bin.count === null ? HEIGHT - 10 : y(bin.count),
     }));
   });
+  /** Bins meet at these numbers: every lower edge, and the last upper one. */
+  protected readonly edges = computed(() => {
+    const bins = this.bins();
+    const last = bins[bins.length - 1];
+    const values = [...bins.map((bin) => bin.from), ...(last ? [last.to] : [])];
+    return values.map((value, at) => ({
+      value,
+      x: (at * 100) / Math.max(1, bins.length),
+      anchor: at === 0 ? 'start' : at === bins.length ? 'end' : 'middle',
+    }));
+  });
   protected readonly table = computed((): ChartTable => ({
     columns: [this.xLabel(), this.yLabel()],
     rows: this.bins().map((bin) => [`${bin.from} to ${bin.to}`, bin.count ?? 'hidden: too few']),

@@ -24,8 +24,11 @@ export interface ShortageLink {
 const PEOPLE_Y = 14;
 const MENTOR_TOP = 118;
 const HEIGHT = 144;
-// The picture is laid out in per cent; sizes in pixels are chosen for a card of this width.
-const CARD_WIDTH = 520;
+// The picture is laid out in per cent; sizes in pixels are chosen for a card on a phone, and the style sheet enlarges
+// marks that had to be small where there is room.
+const NARROW_CARD = 270;
+const LARGEST_DOT = 6.5;
+const LARGEST_PLACE = 12;
 
 /** The people of one shortage above, the mentors who could serve them below with their places, thin links between. */
 @Component({
@@ -52,12 +55,14 @@ export class ShortageFigure {
     ...this.people().filter((person) => !person.leftOut),
     ...this.people().filter((person) => person.leftOut),
   ]);
-  protected readonly radius = computed(() => markSize(this.ordered().length, 0.36, 7));
+  protected readonly radius = computed(() => markSize(this.ordered().length, 0.4, LARGEST_DOT));
   protected readonly dots = computed(() =>
     this.ordered().map((person, at, all) => ({ ...person, x: spread(at, all.length) })),
   );
   private readonly placeCount = computed(() => this.mentors().reduce((sum, mentor) => sum + mentor.places, 0));
-  protected readonly side = computed(() => markSize(this.placeCount() + this.mentors().length, 0.6, 12));
+  protected readonly side = computed(() => markSize(this.placeCount() + this.mentors().length, 0.7, LARGEST_PLACE));
+  protected readonly smallDots = computed(() => this.radius() < LARGEST_DOT);
+  protected readonly smallPlaces = computed(() => this.side() < LARGEST_PLACE);
   protected readonly blocks = computed(() => {
     const columns = this.placeCount() + this.mentors().length;
     const step = 100 / Math.max(1, columns);
@@ -82,7 +87,7 @@ export class ShortageFigure {
       const from = xOfPerson.get(link.person);
       const to = xOfMentor.get(link.mentor);
       if (from === undefined || to === undefined) return [];
-      return [draw({ source: [from, PEOPLE_Y + this.radius()], target: [to, MENTOR_TOP] }) ?? ''];
+      return [draw({ source: [from, PEOPLE_Y + LARGEST_DOT], target: [to, MENTOR_TOP] }) ?? ''];
     });
   });
   protected readonly caption = computed(
@@ -113,5 +118,5 @@ function spread(at: number, count: number): number {
 
 /** A mark as large as its column allows, but not larger than `largest` nor smaller than 1.5 px. */
 function markSize(columns: number, part: number, largest: number): number {
-  return Math.max(1.5, Math.min(largest, (part * CARD_WIDTH) / Math.max(1, columns)));
+  return Math.max(1.5, Math.min(largest, (part * NARROW_CARD) / Math.max(1, columns)));
 }
