@@ -1,10 +1,11 @@
-import { Component } from '@angular/core';
+import { ChangeDetectionStrategy, Component } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
 import { FormControl, ReactiveFormsModule } from '@angular/forms';
 import { AvailabilityGrid } from './availability-grid';
 
 @Component({
   selector: 'app-host-of-availability-grid',
+  changeDetection: ChangeDetectionStrategy.OnPush,
   imports: [AvailabilityGrid, ReactiveFormsModule],
   template: `<app-availability-grid [formControl]="slots" />`,
 })

@@ -1,9 +1,10 @@
-import { Component } from '@angular/core';
+import { ChangeDetectionStrategy, Component } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
 import { EmptyState } from './empty-state';
 
 @Component({
   selector: 'app-host-of-empty-state',
+  changeDetection: ChangeDetectionStrategy.OnPush,
   imports: [EmptyState],
   template: `<app-empty-state title="No cycle yet" text="Start with its dates."
     ><button>Plan a cycle</button></app-empty-state

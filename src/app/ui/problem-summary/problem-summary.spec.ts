@@ -1,9 +1,10 @@
-import { Component } from '@angular/core';
+import { ChangeDetectionStrategy, Component } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
 import { FieldProblem, ProblemSummary } from './problem-summary';
 
 @Component({
   selector: 'app-host-of-problem-summary',
+  changeDetection: ChangeDetectionStrategy.OnPush,
   imports: [ProblemSummary],
   template: `<app-problem-summary [problems]="problems" /><input id="name" />`,
 })
