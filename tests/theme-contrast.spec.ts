@@ -32,7 +32,7 @@ function contrast(a: string, b: string): number {
 }
 
 const tokens = readTokens(readFileSync(TOKENS, 'utf8'));
-const grounds = ['linen', 'paper', 'indigo-soft'];
+const grounds = ['linen', 'paper', 'raised', 'indigo-soft'];
 
 /** What is written in which colour on which ground. */
 const TEXT: readonly (readonly [string, readonly string[]])[] = [
