@@ -1,0 +1,3 @@
+/** The pairing engine's public surface; see README.md. */
+export * from './problem';
+export * from './reduction';
