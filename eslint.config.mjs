@@ -6,7 +6,15 @@ import { defineConfig } from 'eslint/config';
 
 export default defineConfig(
   {
-    ignores: ['dist/', '.angular/', '.data/', 'node_modules/', 'test-results/', 'playwright-report/', 'drizzle/migrations/'],
+    ignores: [
+      'dist/',
+      '.angular/',
+      '.data/',
+      'node_modules/',
+      'test-results/',
+      'playwright-report/',
+      'drizzle/migrations/',
+    ],
   },
   {
     files: ['**/*.ts'],
@@ -25,7 +33,22 @@ export default defineConfig(
   {
     files: ['**/*.mjs'],
     extends: [js.configs.recommended],
-    languageOptions: { globals: { process: 'readonly', console: 'readonly', URL: 'readonly', setTimeout: 'readonly', clearTimeout: 'readonly', setInterval: 'readonly', clearInterval: 'readonly', fetch: 'readonly', performance: 'readonly', Buffer: 'readonly', AbortController: 'readonly', AbortSignal: 'readonly' } },
+    languageOptions: {
+      globals: {
+        process: 'readonly',
+        console: 'readonly',
+        URL: 'readonly',
+        setTimeout: 'readonly',
+        clearTimeout: 'readonly',
+        setInterval: 'readonly',
+        clearInterval: 'readonly',
+        fetch: 'readonly',
+        performance: 'readonly',
+        Buffer: 'readonly',
+        AbortController: 'readonly',
+        AbortSignal: 'readonly',
+      },
+    },
   },
   {
     files: ['src/app/**/*.ts'],

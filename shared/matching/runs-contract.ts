@@ -1,0 +1,214 @@
+/** Runs and plans: what coordinators start, watch, read and publish. */
+import { z } from 'zod';
+import { MatchingSettings } from './matching-contract';
+
+export const RunState = z.enum(['queued', 'running', 'succeeded', 'failed', 'cancelled']);
+export type RunState = z.infer<typeof RunState>;
+export const RUN_STATE_LABEL: Record<RunState, string> = {
+  queued: 'Waiting',
+  running: 'Running',
+  succeeded: 'Done',
+  failed: 'Failed',
+  cancelled: 'Cancelled',
+};
+
+const Applicants = z.array(z.uuid());
+
+/** A group of mentees who compete for too few places. People are application ids. */
+export const ShortageView = z.object({
+  mentees: Applicants,
+  mentors: Applicants,
+  leftOut: Applicants,
+  places: z.int(),
+  short: z.int(),
+  /** What the mentees have in common, in words: "hydrographic · Islands". Empty where nothing stands out. */
+  inCommon: z.string(),
+  remedies: z.array(
+    z.object({
+      kind: z.enum(['more-places', 'without-rule', 'release-lock', 'recruit']),
+      label: z.string(),
+      detail: z.string(),
+      gain: z.int(),
+      /** Mentors (application ids) or the rule's key, for acting on it at once. */
+      mentors: Applicants,
+      rule: z.string().nullable(),
+    }),
+  ),
+});
+export type ShortageView = z.infer<typeof ShortageView>;
+
+export const TradeOffPoint = z.object({
+  pairs: z.int(),
+  netFit: z.number(),
+  totalFit: z.number(),
+  weakestFit: z.int(),
+});
+export type TradeOffPoint = z.infer<typeof TradeOffPoint>;
+
+/** Everything the plan page shows before anyone asks for more. Fits are 0..10000. */
+export const PlanReport = z.object({
+  mentees: z.int(),
+  mentors: z.int(),
+  places: z.int(),
+  eligiblePairs: z.int(),
+  paired: z.int(),
+  leftOut: Applicants,
+  /** Left out though a place could be had: only under other aims. */
+  leftOutByChoice: Applicants,
+  meanFit: z.number(),
+  weakestFit: z.int(),
+  totalFit: z.number(),
+  totalCharge: z.number(),
+  /** Pairings that stay in at least nine of ten reweighted runs; null where not computed. */
+  steady: z.int().nullable(),
+  blockingPairs: z.int().nullable(),
+  method: z.string(),
+  proof: z.object({ ok: z.boolean(), statement: z.string(), checkedAt: z.iso.datetime() }),
+  shortages: z.array(ShortageView),
+  tradeOff: z.array(TradeOffPoint),
+  standbys: z.record(z.string(), z.object({ mentor: z.uuid(), fit: z.int() })),
+  record: z.object({
+    inputHash: z.string(),
+    seed: z.int(),
+    engine: z.string(),
+    settings: MatchingSettings,
+    timings: z.record(z.string(), z.number()),
+  }),
+});
+export type PlanReport = z.infer<typeof PlanReport>;
+
+export const RunLine = z.object({
+  id: z.uuid(),
+  number: z.int(),
+  state: RunState,
+  progress: z.number(),
+  stage: z.string(),
+  cancelRequested: z.boolean(),
+  fault: z.string().nullable(),
+  requestedBy: z.string().nullable(),
+  createdAt: z.iso.datetime(),
+  startedAt: z.iso.datetime().nullable(),
+  finishedAt: z.iso.datetime().nullable(),
+  paired: z.int().nullable(),
+  leftOut: z.int().nullable(),
+  meanFit: z.number().nullable(),
+  weakestFit: z.int().nullable(),
+  publishedAsRound: z.int().nullable(),
+});
+export type RunLine = z.infer<typeof RunLine>;
+export const RunList = z.object({ runs: z.array(RunLine) });
+export type RunList = z.infer<typeof RunList>;
+export const RunParams = z.object({ runId: z.uuid() });
+
+/** One person of a plan, by application. */
+export const PlanPerson = z.object({
+  applicationId: z.uuid(),
+  name: z.string(),
+  area: z.string(),
+  region: z.string(),
+  places: z.int(),
+});
+export type PlanPerson = z.infer<typeof PlanPerson>;
+
+export const PlanPairing = z.object({
+  mentee: z.uuid(),
+  mentor: z.uuid(),
+  fit: z.int(),
+  place: z.int(),
+  /** In the order of `criteria`; −1 = missing data, counted as half. */
+  scores: z.array(z.int()),
+  stays: z.number().nullable(),
+  locked: z.boolean(),
+});
+export type PlanPairing = z.infer<typeof PlanPairing>;
+
+export const Plan = z.object({
+  run: RunLine,
+  cycleId: z.uuid(),
+  report: PlanReport,
+  criteria: z.array(z.object({ key: z.string(), label: z.string(), short: z.string(), weight: z.number() })),
+  mentees: z.array(PlanPerson),
+  mentors: z.array(PlanPerson),
+  pairings: z.array(PlanPairing),
+  decisions: z.array(
+    z.object({
+      mentee: z.uuid(),
+      mentor: z.uuid(),
+      kind: z.enum(['lock', 'bar']),
+      note: z.string(),
+      overridesRules: z.boolean(),
+    }),
+  ),
+  /** What changed since the run froze its inputs: sentences; a withdrawn applicant always blocks publishing. */
+  changedSince: z.array(z.object({ text: z.string(), blocks: z.boolean() })),
+  mayPublish: z.boolean(),
+});
+export type Plan = z.infer<typeof Plan>;
+
+/** One criterion's part in a pair's fit. */
+export const CriterionPart = z.object({
+  key: z.string(),
+  label: z.string(),
+  score: z.number(),
+  weight: z.number(),
+  share: z.number(),
+  missing: z.boolean(),
+  text: z.string(),
+});
+export type CriterionPart = z.infer<typeof CriterionPart>;
+
+/** Why two people may or may not be paired, and how well they fit. */
+export const PairReasons = z.object({
+  eligible: z.boolean(),
+  reasons: z.array(z.object({ rule: z.string(), label: z.string(), text: z.string() })),
+  fit: z.int(),
+  criteria: z.array(CriterionPart),
+});
+export type PairReasons = z.infer<typeof PairReasons>;
+
+/** For one mentee: every eligible mentor, and what choosing each would cost the whole plan. */
+export const Alternatives = z.object({
+  mentee: z.uuid(),
+  current: z.uuid().nullable(),
+  barring: z.object({ pairsLost: z.int(), fitLost: z.int() }).nullable(),
+  options: z.array(
+    z.object({ mentor: z.uuid(), name: z.string(), fit: z.int(), pairsLost: z.int(), fitLost: z.int(), current: z.boolean() }),
+  ),
+});
+export type Alternatives = z.infer<typeof Alternatives>;
+
+export const PairOfApplications = z.object({ mentee: z.uuid(), mentor: z.uuid() });
+export type PairOfApplications = z.infer<typeof PairOfApplications>;
+export const PairDecisionForm = z.strictObject({
+  mentee: z.uuid(),
+  mentor: z.uuid(),
+  kind: z.enum(['lock', 'bar', 'none']),
+  note: z.string().trim().max(500, 'At most 500 characters').default(''),
+  /** Keep a lock that a rule forbids; needs a note. */
+  overridesRules: z.boolean().default(false),
+});
+export type PairDecisionForm = z.input<typeof PairDecisionForm>;
+
+export const RunRequest = z.strictObject({
+  /** Try with these settings instead of the cycle's; null = the cycle's. */
+  settings: MatchingSettings.nullable().default(null),
+});
+export type RunRequest = z.input<typeof RunRequest>;
+
+export const PublishReview = z.object({
+  proposals: z.int(),
+  messages: z.int(),
+  leftOut: z.array(z.object({ applicationId: z.uuid(), name: z.string(), told: z.string() })),
+  answersDueAt: z.iso.datetime(),
+  changedSince: z.array(z.object({ text: z.string(), blocks: z.boolean() })),
+  refusal: z.string().nullable(),
+  version: z.int(),
+});
+export type PublishReview = z.infer<typeof PublishReview>;
+export const PublishRequest = z.strictObject({
+  /** The differences since the run that were on the screen are acknowledged. */
+  acknowledgedChanges: z.boolean().default(false),
+});
+export type PublishRequest = z.input<typeof PublishRequest>;
+export const PublishOutcome = z.object({ round: z.int(), proposals: z.int(), messages: z.int() });
+export type PublishOutcome = z.infer<typeof PublishOutcome>;

@@ -1,0 +1,17 @@
+import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { RouterLink } from '@angular/router';
+import { SessionStore } from '../core/session-store';
+import { CompletenessPanel } from '../profiles/completeness-panel/completeness-panel';
+import { PageHeader } from '../ui/page-header/page-header';
+
+/** The start page: composed of the capabilities' panels, for visitors and for people who are signed in. */
+@Component({
+  selector: 'app-home-page',
+  imports: [CompletenessPanel, MatButton, PageHeader, RouterLink],
+  templateUrl: './home-page.html',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class HomePage {
+  protected readonly session = inject(SessionStore);
+}

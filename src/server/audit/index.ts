@@ -1,0 +1,1 @@
+export { changedFields, recordAll, recordAudit, type AuditFact } from './record-audit';
