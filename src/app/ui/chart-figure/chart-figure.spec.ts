@@ -12,4 +12,14 @@ describe('ChartFigure', () => {
     expect(host.querySelector('tbody th')?.textContent).toBe('60 to 70');
     expect(host.querySelector('tbody td')?.textContent).toBe('44');
   });
+
+  it('says so when there is nothing to show', async () => {
+    const fixture = TestBed.createComponent(ChartFigure);
+    fixture.componentRef.setInput('caption', 'Fits of this plan');
+    fixture.componentRef.setInput('table', { columns: ['Fit'], rows: [] });
+    await fixture.whenStable();
+    const host = fixture.nativeElement as HTMLElement;
+    expect(host.textContent).toContain('nothing to show yet');
+    expect(host.querySelector('table')).toBeNull();
+  });
 });

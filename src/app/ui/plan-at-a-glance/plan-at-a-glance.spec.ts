@@ -54,6 +54,14 @@ describe('PlanAtAGlance', () => {
     expect(chosen).toEqual(['hydrographic', null]);
   });
 
+  it('says so when nobody is in the plan', async () => {
+    const { fixture, host } = await draw();
+    fixture.componentRef.setInput('groups', []);
+    await fixture.whenStable();
+    expect(host.querySelector('.followed-words')?.textContent).toContain('Nobody is in this plan yet');
+    expect(host.querySelector('[role="listbox"]')).toBeNull();
+  });
+
   it('bundles where there are very many threads', async () => {
     const { fixture, host } = await draw();
     fixture.componentRef.setInput('threadLimit', 0);

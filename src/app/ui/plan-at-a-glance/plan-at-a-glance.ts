@@ -41,8 +41,10 @@ export class PlanAtAGlance {
     () => this.layout().threads.length > this.threadLimit() || this.layout().mentees.length > 2 * this.threadLimit(),
   );
   protected readonly radius = computed(() =>
-    Math.max(1.5, Math.min(4.5, (0.43 * this.layout().pitch * REFERENCE_WIDTH) / 100)),
+    Math.max(0.7, Math.min(4.5, (0.43 * this.layout().pitch * REFERENCE_WIDTH) / 100)),
   );
+  /** The line of hollow marks, thin enough to leave them hollow. */
+  protected readonly rim = computed(() => Math.min(1.2, this.radius() * 0.45));
   protected readonly summary = computed(() => {
     const mentees = this.layout().mentees.length;
     const places = this.layout().places.length;
@@ -68,7 +70,9 @@ export class PlanAtAGlance {
     return at < 0 ? null : this.optionId(at);
   });
 
+  protected readonly nobody = computed(() => this.layout().mentees.length + this.layout().places.length === 0);
   protected readonly hint = computed(() => {
+    if (this.nobody()) return 'Nobody is in this plan yet.';
     const short = this.groups().filter((group) => group.short > 0);
     if (short.length === 0) return 'No group is short of places.';
     return `Short of places: ${short.map((group) => `${group.label}, ${group.short} too few`).join('; ')}.`;

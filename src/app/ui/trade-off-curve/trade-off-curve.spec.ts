@@ -22,8 +22,8 @@ describe('TradeOffCurve', () => {
     expect(host.querySelectorAll('tbody tr')).toHaveLength(2);
   });
 
-  it.each([[[]], [[{ paired: 3, meanFit: 5000 }]]])('draws %o without broken numbers', async (points) => {
-    const host = await draw(points, null);
+  it.each([0, 1])('draws %i points without broken numbers', async (count) => {
+    const host = await draw([{ paired: 3, meanFit: 5000 }].slice(0, count), null);
     expect(host.innerHTML).not.toMatch(/NaN|Infinity/);
   });
 });
