@@ -16,6 +16,7 @@ export default defineConfig({
         test: {
           name: 'api',
           include: ['tests/**/*.api.spec.ts'],
+          globalSetup: ['tests/support/global-setup.ts'],
           testTimeout: 60_000,
           hookTimeout: 60_000,
         },

@@ -1,5 +1,6 @@
 /** The pairing engine's public surface; see README.md. */
 export * from './problem';
 export * from './reduction';
+export { problemFromMatrix } from './matrix';
 export { solve } from './solve';
 export { verify, type Verdict } from './certificate';

@@ -55,6 +55,8 @@ export function createApi(parts: ApiParts): Api {
   router.use('/api', sameOriginOnly(parts.settings));
   router.use('/api', ...sessions.middleware);
   router.use('/api', (req, res, next) => (UNSAFE.has(req.method) ? sessions.csrfCheck(req, res, next) : next()));
+  // Clients that never load a page get their token where they ask who they are.
+  router.get('/api/accounts/session', sessions.csrfCookie);
   for (const table of parts.routes) mount(router, table, parts, sessions, limits);
   router.use('/api', () => {
     throw notFound('address');

@@ -1,5 +1,6 @@
 /** Sessions in PostgreSQL, sign-in through passport, and the defence against forged requests. */
 import connectPgSimple from 'connect-pg-simple';
+import cookieParser from 'cookie-parser';
 import { doubleCsrf } from 'csrf-csrf';
 import type { NextFunction, Request, RequestHandler, Response } from 'express';
 import session from 'express-session';
@@ -60,6 +61,7 @@ export function createSessions(pool: pg.Pool, settings: Settings, door: SignInDo
   const csrf = createCsrf(settings);
   return {
     middleware: [
+      cookieParser(),
       session({
         store,
         name: cookieName,

@@ -16,6 +16,7 @@ import {
   ROLE_LABEL,
 } from '../../../../shared/accounts/accounts-contract';
 import { asContract, faultOf } from '../../core/form-faults';
+import { orEmpty } from '../../core/query-inputs';
 import { Notices } from '../../core/notices';
 import { EmptyState } from '../../ui/empty-state/empty-state';
 import { PageHeader } from '../../ui/page-header/page-header';
@@ -48,8 +49,8 @@ const STATE_LABEL: Record<PersonLine['state'], string> = {
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class PeoplePage {
-  readonly search = input('');
-  readonly page = input('1');
+  readonly search = input('', { transform: orEmpty });
+  readonly page = input('1', { transform: orEmpty });
 
   private readonly client = inject(AccountsClient);
   private readonly router = inject(Router);

@@ -9,6 +9,7 @@ import { Router, RouterLink } from '@angular/router';
 import { debounceTime, Subject } from 'rxjs';
 import { MESSAGE_STATE_LABEL, MessageState } from '../../../../shared/messages/messages-contract';
 import { MomentPipe } from '../../core/moments';
+import { orEmpty } from '../../core/query-inputs';
 import { SessionStore } from '../../core/session-store';
 import { EmptyState } from '../../ui/empty-state/empty-state';
 import { PageHeader } from '../../ui/page-header/page-header';
@@ -32,9 +33,9 @@ import { MessagesClient } from '../messages-client';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class MessagesPage {
-  readonly search = input('');
-  readonly state = input('');
-  readonly page = input('1');
+  readonly search = input('', { transform: orEmpty });
+  readonly state = input('', { transform: orEmpty });
+  readonly page = input('1', { transform: orEmpty });
 
   private readonly client = inject(MessagesClient);
   private readonly router = inject(Router);
