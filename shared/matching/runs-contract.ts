@@ -1,6 +1,9 @@
 /** Runs and plans: what coordinators start, watch, read and publish. */
 import { z } from 'zod';
+import { AskFirst } from '../cycles/cycles-contract';
 import { MatchingSettings } from './matching-contract';
+
+const Aim = z.enum(['everyone-first', 'best-total', 'lift-the-weakest']);
 
 export const RunState = z.enum(['queued', 'running', 'succeeded', 'failed', 'cancelled']);
 export type RunState = z.infer<typeof RunState>;
@@ -21,6 +24,8 @@ export const ShortageView = z.object({
   leftOut: Applicants,
   places: z.int(),
   short: z.int(),
+  /** Who could have whom, as positions in `mentees` and `mentors`; empty where the group is too large to be drawn. */
+  links: z.array(z.tuple([z.int(), z.int()])),
   /** What the mentees have in common, in words: "hydrographic · Islands". Empty where nothing stands out. */
   inCommon: z.string(),
   remedies: z.array(
@@ -55,6 +60,8 @@ export const PlanReport = z.object({
   leftOut: Applicants,
   /** Left out though a place could be had: only under other aims. */
   leftOutByChoice: Applicants,
+  /** For each person left out (application id): why, in a sentence, and the shortage (its position) they belong to. */
+  leftOutBecause: z.record(z.string(), z.object({ text: z.string(), shortage: z.int().nullable() })),
   meanFit: z.number(),
   weakestFit: z.int(),
   totalFit: z.number(),
@@ -104,8 +111,11 @@ export const RunParams = z.object({ runId: z.uuid() });
 export const PlanPerson = z.object({
   applicationId: z.uuid(),
   name: z.string(),
+  /** The first practice area that the mentee seeks or the mentor offers; empty where none is given. */
   area: z.string(),
   region: z.string(),
+  employer: z.string(),
+  /** A mentor's places in this run; 0 for a mentee. */
   places: z.int(),
 });
 export type PlanPerson = z.infer<typeof PlanPerson>;
@@ -172,7 +182,14 @@ export const Alternatives = z.object({
   current: z.uuid().nullable(),
   barring: z.object({ pairsLost: z.int(), fitLost: z.int() }).nullable(),
   options: z.array(
-    z.object({ mentor: z.uuid(), name: z.string(), fit: z.int(), pairsLost: z.int(), fitLost: z.int(), current: z.boolean() }),
+    z.object({
+      mentor: z.uuid(),
+      name: z.string(),
+      fit: z.int(),
+      pairsLost: z.int(),
+      fitLost: z.int(),
+      current: z.boolean(),
+    }),
   ),
 });
 export type Alternatives = z.infer<typeof Alternatives>;
@@ -196,8 +213,14 @@ export const RunRequest = z.strictObject({
 export type RunRequest = z.input<typeof RunRequest>;
 
 export const PublishReview = z.object({
+  run: RunLine,
+  round: z.int(),
   proposals: z.int(),
   messages: z.int(),
+  askFirst: AskFirst,
+  pairings: z.array(
+    z.object({ mentee: z.uuid(), menteeName: z.string(), mentor: z.uuid(), mentorName: z.string(), fit: z.int() }),
+  ),
   leftOut: z.array(z.object({ applicationId: z.uuid(), name: z.string(), told: z.string() })),
   answersDueAt: z.iso.datetime(),
   changedSince: z.array(z.object({ text: z.string(), blocks: z.boolean() })),
@@ -212,3 +235,77 @@ export const PublishRequest = z.strictObject({
 export type PublishRequest = z.input<typeof PublishRequest>;
 export const PublishOutcome = z.object({ round: z.int(), proposals: z.int(), messages: z.int() });
 export type PublishOutcome = z.infer<typeof PublishOutcome>;
+
+export const PersonOfRunParams = RunParams.extend({ applicationId: z.uuid() });
+export const PairOfRunParams = RunParams.extend({ mentee: z.uuid(), mentor: z.uuid() });
+
+/** What a lock or a bar would cost the run's plan, before it is made. */
+export const DecisionPrice = z.object({
+  /** Mentees who could no longer be paired, and fit (0..10000 a pair) lost at that number. */
+  pairsLost: z.int(),
+  fitLost: z.int(),
+  /** Why it cannot be, or only on purpose; null where nothing stands in the way. */
+  refusal: z.string().nullable(),
+  /** True where a coordinator may keep the lock all the same, with a note. */
+  mayOverride: z.boolean(),
+});
+export type DecisionPrice = z.infer<typeof DecisionPrice>;
+export const DecisionPrices = z.object({ lock: DecisionPrice, bar: DecisionPrice });
+export type DecisionPrices = z.infer<typeof DecisionPrices>;
+
+const Ints = z.array(z.int());
+const Numbers = z.array(z.number());
+const IndexPairs = z.array(z.tuple([z.int(), z.int()]));
+
+/** The problem and the plan as arrays, for checking the proof with one's own machine (see shared/assignment, `verify`). */
+export const ProofArrays = z.object({
+  problem: z.object({
+    menteeCount: z.int(),
+    mentorCount: z.int(),
+    capacity: Ints,
+    rowStart: Ints,
+    target: Ints,
+    fit: Ints,
+    loadCharge: Ints.nullable(),
+    placesTaken: Ints.nullable(),
+  }),
+  options: z.object({
+    aim: Aim,
+    floor: z.int(),
+    locked: IndexPairs,
+    barred: IndexPairs,
+    overridden: IndexPairs,
+  }),
+  plan: z.object({
+    aim: Aim,
+    method: z.enum(['complete', 'cardinality-first', 'best-total']),
+    mentorOf: Ints,
+    paired: z.int(),
+    totalFit: z.number(),
+    totalCharge: z.number(),
+    weakestFit: z.int(),
+    menteePrice: Numbers,
+    mentorPrice: Numbers,
+    lift: z
+      .object({
+        threshold: z.int(),
+        cardinalityCover: z.object({ mentees: Ints, mentors: Ints }),
+        thresholdCover: z.object({ mentees: Ints, mentors: Ints }),
+      })
+      .nullable(),
+  }),
+});
+export type ProofArrays = z.infer<typeof ProofArrays>;
+
+/** Two plans of one cycle, person by person: only those mentees whose mentor differs. */
+export const ComparisonParams = RunParams.extend({ otherId: z.uuid() });
+const PlacedWith = z.object({ mentor: z.uuid().nullable(), name: z.string(), fit: z.int().nullable() });
+export const PlanComparison = z.object({
+  before: RunLine,
+  after: RunLine,
+  same: z.int(),
+  changed: z.array(z.object({ mentee: z.uuid(), name: z.string(), before: PlacedWith, after: PlacedWith })),
+  /** Differences of settings and people between the two, in sentences. */
+  because: z.array(z.string()),
+});
+export type PlanComparison = z.infer<typeof PlanComparison>;
