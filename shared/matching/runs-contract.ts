@@ -1,9 +1,7 @@
 /** Runs and plans: what coordinators start, watch, read and publish. */
 import { z } from 'zod';
 import { AskFirst } from '../cycles/cycles-contract';
-import { MatchingSettings } from './matching-contract';
-
-const Aim = z.enum(['everyone-first', 'best-total', 'lift-the-weakest']);
+import { Aim, MatchingSettings } from './matching-contract';
 
 export const RunState = z.enum(['queued', 'running', 'succeeded', 'failed', 'cancelled']);
 export type RunState = z.infer<typeof RunState>;
