@@ -4,3 +4,4 @@ export * from './reduction';
 export { problemFromMatrix } from './matrix';
 export { solve } from './solve';
 export { verify, type Verdict } from './certificate';
+export { largestPairing, type LargestPairing } from './cardinality';

@@ -53,6 +53,9 @@ export function eligibleFit(judge: Judge, i: number, j: number): number {
   return fit < floor ? NOT_ELIGIBLE : fit;
 }
 
+/** Pairs in compressed sparse rows. */
+export type Rows = Pick<PairingProblem, 'rowStart' | 'target' | 'fit'>;
+
 /** Collects pairs row by row into growing typed arrays. */
 export class RowBuilder {
   private readonly rowStart: Int32Array;
@@ -80,7 +83,7 @@ export class RowBuilder {
     this.rowStart[++this.row] = this.size;
   }
 
-  rows(): Pick<PairingProblem, 'rowStart' | 'target' | 'fit'> {
+  rows(): Rows {
     return { rowStart: this.rowStart, target: this.target.slice(0, this.size), fit: this.fit.slice(0, this.size) };
   }
 }
@@ -89,6 +92,24 @@ function grown(values: Int32Array): Int32Array {
   const larger = new Int32Array(values.length * 2);
   larger.set(values);
   return larger;
+}
+
+/** The pairs of both, which have none in common, in rows of ascending mentors. Time and memory O(pairs). */
+export function mergedRows(a: Rows, b: Rows): Rows {
+  const builder = new RowBuilder(a.rowStart.length - 1, a.target.length + b.target.length);
+  for (let row = 0; row + 1 < a.rowStart.length; row++) {
+    let left = a.rowStart[row]!;
+    let right = b.rowStart[row]!;
+    while (left < a.rowStart[row + 1]! || right < b.rowStart[row + 1]!) {
+      const takeLeft =
+        right === b.rowStart[row + 1]! || (left < a.rowStart[row + 1]! && a.target[left]! < b.target[right]!);
+      const from = takeLeft ? a : b;
+      const at = takeLeft ? left++ : right++;
+      builder.add(from.target[at]!, from.fit[at]!);
+    }
+    builder.endRow();
+  }
+  return builder.rows();
 }
 
 /** Locks and bars between people who are both in the input, as positions; others have no effect. */
@@ -139,10 +160,7 @@ export function buildProblem(input: MatchingInput, tick: (share: number) => void
 }
 
 /** Completes rows with the mentors' places and charges. */
-export function sidesOf(
-  input: MatchingInput,
-  rows: Pick<PairingProblem, 'rowStart' | 'target' | 'fit'>,
-): PairingProblem {
+export function sidesOf(input: MatchingInput, rows: Rows): PairingProblem {
   return {
     menteeCount: input.mentees.length,
     mentorCount: input.mentors.length,

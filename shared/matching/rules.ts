@@ -106,7 +106,7 @@ function noSwap({ mentees, mentors, menteeCount, mentorCount }: Columns): Test {
   return (i, j) => {
     const mentee = mentees.person[i]!;
     const mentor = mentors.person[j]!;
-    if (!seeks.has(mentor) || !yearsAsMentor.has(mentee)) return true;
+    if (mentee === mentor || !seeks.has(mentor) || !yearsAsMentor.has(mentee)) return true;
     const less = yearsAsMentor.get(mentee)!;
     const more = mentors.years[j]!;
     return more > less || (more === less && mentor < mentee);
