@@ -5,3 +5,4 @@ export { problemFromMatrix } from './matrix';
 export { solve } from './solve';
 export { verify, type Verdict } from './certificate';
 export { largestPairing, type LargestPairing } from './cardinality';
+export { priceOfBarring, priceOfChoice, priceOfPartner, pricesOfPartners, type Change, type Price } from './price';
