@@ -6,3 +6,4 @@ export { solve } from './solve';
 export { verify, type Verdict } from './certificate';
 export { largestPairing, type LargestPairing } from './cardinality';
 export { priceOfBarring, priceOfChoice, priceOfPartner, pricesOfPartners, type Change, type Price } from './price';
+export { tradeOff, type TradeOffPoint } from './trade-off';
