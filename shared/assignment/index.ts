@@ -7,3 +7,5 @@ export { verify, type Verdict } from './certificate';
 export { largestPairing, type LargestPairing } from './cardinality';
 export { priceOfBarring, priceOfChoice, priceOfPartner, pricesOfPartners, type Change, type Price } from './price';
 export { tradeOff, type TradeOffPoint } from './trade-off';
+export { repairWithout, standbys } from './standbys';
+export { steadiness } from './steadiness';
