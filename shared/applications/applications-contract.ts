@@ -1,6 +1,7 @@
 /** Applications: a person, in a cycle, on a side. */
 import { z } from 'zod';
-import { CareerStage, Region } from '../profiles/profiles-contract';
+import { CyclePhase } from '../cycles/cycles-contract';
+import { CareerStage, MentoringProfile, Region } from '../profiles/profiles-contract';
 
 export const ApplicationSide = z.enum(['mentor', 'mentee']);
 export type ApplicationSide = z.infer<typeof ApplicationSide>;
@@ -64,6 +65,28 @@ export type OwnApplication = z.infer<typeof OwnApplication>;
 export const OwnApplications = z.object({ applications: z.array(OwnApplication) });
 export type OwnApplications = z.infer<typeof OwnApplications>;
 
+export const SideParams = z.object({ cycleId: z.uuid(), side: ApplicationSide });
+
+/** What one needs to apply to a cycle, and what one has sent already. */
+export const ApplicationDesk = z.object({
+  cycleId: z.uuid(),
+  cycleName: z.string(),
+  introduction: z.string(),
+  phase: CyclePhase,
+  applicationsCloseOn: z.iso.date(),
+  answersDueOn: z.iso.date(),
+  consentText: z.string(),
+  consentVersion: z.int(),
+  /** New applications are taken, be it for the waiting list. */
+  takesApplications: z.boolean(),
+  /** The deadline has passed: who applies now goes to the waiting list. */
+  late: z.boolean(),
+  /** What was sent may still be changed. */
+  mayChange: z.boolean(),
+  applications: z.array(OwnApplication),
+});
+export type ApplicationDesk = z.infer<typeof ApplicationDesk>;
+
 /** A mentor who agreed to be listed, as applicants may see them. */
 export const ListedMentor = z.object({
   personId: z.uuid(),
@@ -99,7 +122,16 @@ export const ApplicantLine = z.object({
 });
 export type ApplicantLine = z.infer<typeof ApplicantLine>;
 
-export const APPLICANT_SORTS = ['name', 'side', 'status', 'employer', 'region', 'years', 'submitted', 'completeness'] as const;
+export const APPLICANT_SORTS = [
+  'name',
+  'side',
+  'status',
+  'employer',
+  'region',
+  'years',
+  'submitted',
+  'completeness',
+] as const;
 export const ApplicantsQuery = z.object({
   search: z.string().trim().max(100).default(''),
   side: ApplicationSide.optional(),
@@ -121,7 +153,24 @@ export const ApplicantsPage = z.object({
 });
 export type ApplicantsPage = z.infer<typeof ApplicantsPage>;
 
-/** A coordinator's decision about several applications at once; versions guard against somebody else's. */
+export const ApplicantParams = z.object({ cycleId: z.uuid(), applicationId: z.uuid() });
+/** A whole application for coordinators, with the private section of its profile. */
+export const ApplicantDetail = z.object({
+  line: ApplicantLine,
+  goals: z.string(),
+  preferredMentors: z.array(z.object({ personId: z.uuid(), name: z.string() })),
+  membershipNumber: z.string().nullable(),
+  consentVersion: z.int().nullable(),
+  consentAt: z.iso.datetime().nullable(),
+  leftOutLastTime: z.boolean(),
+  withdrawnAt: z.iso.datetime().nullable(),
+  profile: MentoringProfile,
+  offers: z.array(z.string()),
+  seeks: z.array(z.string()),
+});
+export type ApplicantDetail = z.infer<typeof ApplicantDetail>;
+
+/** A coordinator's decision about several applications at once. */
 export const AdmissionDecision = z.strictObject({
   status: z.enum(['admitted', 'waiting-list', 'withdrawn', 'submitted']),
   applicationIds: z.array(z.uuid()).min(1, 'Choose at least one application').max(5000),
@@ -171,7 +220,9 @@ export const IMPORT_MAX_ROWS = 10_000;
 /** `content` is the file's bytes in base64: the server finds out the encoding (UTF-8 or Windows-1252) and the separator. */
 export const ImportRequest = z.strictObject({
   fileName: z.string().max(200),
-  content: z.base64('The file could not be read').max(Math.ceil((IMPORT_MAX_BYTES * 4) / 3) + 8, 'The file is larger than 5 MB'),
+  content: z
+    .base64('The file could not be read')
+    .max(Math.ceil((IMPORT_MAX_BYTES * 4) / 3) + 8, 'The file is larger than 5 MB'),
   mapping: ImportMapping.optional(),
 });
 export type ImportRequest = z.infer<typeof ImportRequest>;
