@@ -86,6 +86,13 @@ export const RULES: Record<RuleKey, CatalogueEntry> = {
   },
 };
 
+/** Not even a coordinator's note makes a pairing right that one of these excludes. */
+export const NEVER_OVERRIDDEN: ReadonlySet<string> = new Set<RuleKey>([
+  'not-oneself',
+  'not-declined',
+  'no-private-exclusion',
+]);
+
 export const CRITERIA: Record<CriterionKey, CatalogueEntry & { side: 'mentee' | 'mentor' | 'both' }> = {
   'practice-areas': {
     label: 'Practice areas',

@@ -1,5 +1,6 @@
 /** The effect of rules and criteria on who could be paired, computed from the applicants as they are. */
 import { z } from 'zod';
+import { MatchingSettings } from './matching-contract';
 
 /** Bins of the distribution of fits: each 5 points of 100 wide; the last one holds 95 to 100. */
 export const FIT_BINS = 20;
@@ -30,3 +31,6 @@ export const RuleEffects = z.object({
   distribution: z.array(z.int()),
 });
 export type RuleEffects = z.infer<typeof RuleEffects>;
+
+export const EffectsRequest = z.strictObject({ settings: MatchingSettings });
+export type EffectsRequest = z.input<typeof EffectsRequest>;

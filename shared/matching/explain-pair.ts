@@ -17,14 +17,10 @@ import type { CriterionKey, RuleKey } from './matching-contract';
 import type { CriterionPart, PairReasons } from './runs-contract';
 import { slotsOfBits } from './weekly-slots';
 
-/** Names of tags by id, and of languages by code, for the sentences. */
-export interface Names {
-  tag(id: string): string;
-  language(code: string): string;
-}
+const LANGUAGE_NAMES = new Intl.DisplayNames('en', { type: 'language' });
 
 /** Everything that can be said of mentee i and mentor j (positions of the input). */
-export function explainPair(judge: Judge, i: number, j: number, names: Names): PairReasons {
+export function explainPair(judge: Judge, i: number, j: number): PairReasons {
   const reasons = judge.rules
     .filter((rule) => !rule.allows(i, j))
     .map((rule) => ({ rule: rule.key, label: labelOf(judge, rule.key), text: sentenceOf(judge, rule.key, i, j) }));
@@ -49,7 +45,7 @@ export function explainPair(judge: Judge, i: number, j: number, names: Names): P
         weight: criterion.weight,
         share: criterion.share,
         missing: score === MISSING,
-        text: valuesOf(judge, criterion.key, i, j, names),
+        text: valuesOf(judge, criterion.key, i, j),
       };
     }),
   };
@@ -126,15 +122,15 @@ function meetingSentence({ columns, input }: Judge, i: number, j: number): strin
 }
 
 /** The values behind a score, in words. */
-function valuesOf(judge: Judge, key: CriterionKey, i: number, j: number, names: Names): string {
+function valuesOf(judge: Judge, key: CriterionKey, i: number, j: number): string {
   const { columns, input } = judge;
   const mentee = input.mentees[i]!;
   const mentor = input.mentors[j]!;
   switch (key) {
     case 'practice-areas':
-      return tagValues(judge, 'areas', i, j, names) || 'The mentee seeks no practice area';
+      return tagValues(judge, 'areas', i, j) || 'The mentee seeks no practice area';
     case 'topics':
-      return tagValues(judge, 'topics', i, j, names) || 'The mentee seeks no topic';
+      return tagValues(judge, 'topics', i, j) || 'The mentee seeks no topic';
     case 'weekly-overlap': {
       if (columns.mentees.slots[i] === 0 || columns.mentors.slots[j] === 0)
         return 'Times of the week are not known for both';
@@ -156,7 +152,7 @@ function valuesOf(judge: Judge, key: CriterionKey, i: number, j: number, names: 
       if (!columns.mentees.hasLanguages[i] || !columns.mentors.hasLanguages[j])
         return 'Languages are not known for both';
       if (!level) return 'No common language';
-      return `${names.language(columns.languages[language]!)}: ${level === 'first' ? 'first language of both' : level}`;
+      return `${LANGUAGE_NAMES.of(columns.languages[language]!)}: ${level === 'first' ? 'first language of both' : level}`;
     }
     case 'sector':
       if (mentee.wishedSector === 'any') return 'The mentee takes any sector';
@@ -173,12 +169,12 @@ function valuesOf(judge: Judge, key: CriterionKey, i: number, j: number, names: 
   }
 }
 
-function tagValues(judge: Judge, kind: 'areas' | 'topics', i: number, j: number, names: Names): string {
+function tagValues(judge: Judge, kind: 'areas' | 'topics', i: number, j: number): string {
   const { columns, input } = judge;
   return [...columns[kind][i]!.tags]
     .map((tag) => {
       const cover = columns.cover[j * columns.tagCount + tag]!;
-      return `${names.tag(input.tags[tag]!.id)}: ${coverInWords(cover)}`;
+      return `${input.tags[tag]!.label}: ${coverInWords(cover)}`;
     })
     .join('; ');
 }

@@ -60,9 +60,9 @@ export interface MatchingInput {
   day: string;
   mentees: MenteeInput[];
   mentors: MentorInput[];
-  tags: { id: string; kind: 'practice-area' | 'topic'; parent: string | null }[];
-  /** Degrees. */
-  towns: Record<string, { latitude: number; longitude: number }>;
+  tags: { id: string; label: string; kind: 'practice-area' | 'topic'; parent: string | null }[];
+  /** Degrees, and the region each town lies in. */
+  towns: Record<string, { latitude: number; longitude: number; region: string }>;
   /** Pairs of people of earlier cycles, and how many cycles ago (1 = the last one). */
   earlier: { mentee: string; mentor: string; cyclesAgo: number }[];
   /** Pairs of people of which one declined in this cycle. */

@@ -46,6 +46,12 @@ export function ruleEffects(input: MatchingInput): RuleEffects {
   };
 }
 
+/** Pairs that one rule alone excludes, by rule; fits included. */
+export function soleObjections(judge: Judge): Map<RuleKey, Rows> {
+  const survey = surveyPairs(judge);
+  return new Map(survey.keys.map((key, bit) => [key, survey.alone[bit]!.rows()]));
+}
+
 function labelOf(input: MatchingInput, key: RuleKey): string {
   const setting = input.settings.rules.find((rule) => rule.rule === key);
   return setting ? ruleInWords(setting) : RULES[key].label;
@@ -82,12 +88,13 @@ function place(survey: Survey, judge: Judge, i: number, j: number): void {
   if (only === SEVERAL) return;
   if (only !== NONE) {
     survey.excludesAlone[only]!++;
-    survey.alone[only]!.add(j, 0);
+    survey.alone[only]!.add(j, fitOf(judge.criteria, i, j));
     return;
   }
+  const fit = fitOf(judge.criteria, i, j);
   survey.eligiblePairs++;
-  survey.eligible.add(j, 0);
-  survey.distribution[Math.min(FIT_BINS - 1, Math.floor(fitOf(judge.criteria, i, j) / BIN_WIDTH))]!++;
+  survey.eligible.add(j, fit);
+  survey.distribution[Math.min(FIT_BINS - 1, Math.floor(fit / BIN_WIDTH))]!++;
 }
 
 const NONE = -1;

@@ -4,9 +4,8 @@ import { judgeOf } from './build-problem';
 import { explainPair } from './explain-pair';
 import type { MatchingInput, MenteeInput, MentorInput } from './matching-input';
 
-const names = { tag: (id: string) => id, language: (code: string) => code };
 const reasons = (input: MatchingInput): string[] =>
-  explainPair(judgeOf(input), 0, 0, names).reasons.map((reason) => reason.rule);
+  explainPair(judgeOf(input), 0, 0).reasons.map((reason) => reason.rule);
 const between = (
   mentee: Partial<MenteeInput>,
   mentor: Partial<MentorInput>,
@@ -131,7 +130,7 @@ describe('rules', () => {
       ...input,
       mentees: input.mentees.map((mentee) => ({ ...mentee, employer: `${mentee.person} alone` })),
     });
-    const rulesOf = (i: number, j: number) => explainPair(judge, i, j, names).reasons.map((reason) => reason.rule);
+    const rulesOf = (i: number, j: number) => explainPair(judge, i, j).reasons.map((reason) => reason.rule);
     expect(rulesOf(0, 1)).toEqual([]);
     expect(rulesOf(1, 0)).toEqual(['no-two-way-swap']);
   });
@@ -146,7 +145,6 @@ describe('rules', () => {
       ),
       0,
       0,
-      names,
     );
     expect(eligible).toBe(false);
     expect(found.map((reason) => reason.text)).toEqual([

@@ -204,6 +204,22 @@ export const PairDecisionForm = z.strictObject({
 });
 export type PairDecisionForm = z.input<typeof PairDecisionForm>;
 
+export const PairDecisions = z.object({
+  decisions: z.array(
+    z.object({
+      mentee: z.uuid(),
+      menteeName: z.string(),
+      mentor: z.uuid(),
+      mentorName: z.string(),
+      kind: z.enum(['lock', 'bar']),
+      note: z.string(),
+      overridesRules: z.boolean(),
+      decidedAt: z.iso.datetime(),
+    }),
+  ),
+});
+export type PairDecisions = z.infer<typeof PairDecisions>;
+
 export const RunRequest = z.strictObject({
   /** Try with these settings instead of the cycle's; null = the cycle's. */
   settings: MatchingSettings.nullable().default(null),
@@ -234,6 +250,7 @@ export type PublishRequest = z.input<typeof PublishRequest>;
 export const PublishOutcome = z.object({ round: z.int(), proposals: z.int(), messages: z.int() });
 export type PublishOutcome = z.infer<typeof PublishOutcome>;
 
+export const PriceQuery = z.object({ kind: z.enum(['lock', 'bar']) });
 export const PersonOfRunParams = RunParams.extend({ applicationId: z.uuid() });
 export const PairOfRunParams = RunParams.extend({ mentee: z.uuid(), mentor: z.uuid() });
 

@@ -84,7 +84,10 @@ export async function findReport(db: Db, runId: string): Promise<PlanReport | nu
 }
 
 export async function nextRunNumber(db: Db, cycleId: string): Promise<number> {
-  const [row] = await db.select({ last: max(runs.number) }).from(runs).where(eq(runs.cycleId, cycleId));
+  const [row] = await db
+    .select({ last: max(runs.number) })
+    .from(runs)
+    .where(eq(runs.cycleId, cycleId));
   return (row?.last ?? 0) + 1;
 }
 

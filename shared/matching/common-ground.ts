@@ -1,0 +1,45 @@
+/** What a group of mentees has in common, in words. */
+import { REGION_LABEL, type Region } from '../profiles/profiles-contract';
+import type { Judge } from './build-problem';
+
+/** A trait is named where at least this share of the group has it … */
+const SHARE_IN_GROUP = 0.6;
+/** … and it is at least this much more frequent than among all mentees. */
+const LIFT = 1.2;
+
+/** Practice areas by how many of these mentees seek them, most first. */
+export function tagsSought(judge: Judge, mentees: readonly number[]): { label: string; mentees: number[] }[] {
+  const seekers = new Map<number, number[]>();
+  for (const i of mentees)
+    for (const tag of judge.columns.areas[i]!.tags) {
+      const list = seekers.get(tag);
+      if (list) list.push(i);
+      else seekers.set(tag, [i]);
+    }
+  return [...seekers]
+    .sort(([a, left], [b, right]) => right.length - left.length || a - b)
+    .map(([tag, list]) => ({ label: judge.input.tags[tag]!.label, mentees: list }));
+}
+
+const regionOf = (judge: Judge, i: number): string | null => {
+  const { town } = judge.input.mentees[i]!;
+  return town === null ? null : (judge.input.towns[town]?.region ?? null);
+};
+
+/** "Hydrographic · Islands"; empty where nothing stands out. */
+export function commonGround(judge: Judge, mentees: readonly number[]): string {
+  if (mentees.length === 0) return '';
+  const all = judge.input.mentees.map((_, i) => i);
+  const usual = new Map(tagsSought(judge, all).map((tag) => [tag.label, tag.mentees.length / all.length]));
+  const stands = (share: number, among: number): boolean => share >= SHARE_IN_GROUP && share >= LIFT * among;
+  const tags = tagsSought(judge, mentees)
+    .filter((tag) => stands(tag.mentees.length / mentees.length, usual.get(tag.label) ?? 0))
+    .slice(0, 2)
+    .map((tag) => tag.label);
+  const regions = Object.keys(REGION_LABEL).filter((region) => {
+    const share = (group: readonly number[]): number =>
+      group.filter((i) => regionOf(judge, i) === region).length / group.length;
+    return stands(share(mentees), share(all));
+  });
+  return [...tags, ...regions.map((region) => REGION_LABEL[region as Region])].join(' · ');
+}

@@ -1,0 +1,3 @@
+export { answerOwn } from './answer-pairing';
+export { keepDeadlines } from './keep-deadlines';
+export { pairingsRoutes } from './pairings-router';
