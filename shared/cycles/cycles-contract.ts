@@ -65,12 +65,19 @@ const cycleFields = CycleDates.extend({
   autoAdmit: z.boolean(),
 });
 
-export const CycleDraft = z.strictObject(cycleFields.shape).superRefine((cycle, check) => {
+function checkDates(cycle: CycleDates, check: z.RefinementCtx): void {
   for (const [earlier, later, message] of DATE_ORDER) {
     if (cycle[earlier] > cycle[later]) check.addIssue({ code: 'custom', path: [later], message });
   }
-});
+}
+
+export const CycleDraft = z.strictObject(cycleFields.shape).superRefine(checkDates);
 export type CycleDraft = z.infer<typeof CycleDraft>;
+/** `copyFrom`: a cycle whose rules, criteria and weights the new one starts with; null = the default set. */
+export const NewCycle = z
+  .strictObject({ ...cycleFields.shape, copyFrom: z.uuid().nullable().default(null) })
+  .superRefine(checkDates);
+export type NewCycle = z.input<typeof NewCycle>;
 
 /** What anybody may know of a cycle. */
 export const CycleSummary = cycleFields.omit({ autoAdmit: true, consentText: true, askFirst: true }).extend({
@@ -78,6 +85,9 @@ export const CycleSummary = cycleFields.omit({ autoAdmit: true, consentText: tru
   phase: CyclePhase,
 });
 export type CycleSummary = z.infer<typeof CycleSummary>;
+/** What an applicant reads before applying. */
+export const CycleToApply = CycleSummary.extend({ consentText: z.string(), consentVersion: z.int() });
+export type CycleToApply = z.infer<typeof CycleToApply>;
 export const CycleList = z.object({ cycles: z.array(CycleSummary) });
 export type CycleList = z.infer<typeof CycleList>;
 
@@ -86,6 +96,8 @@ export const CycleCounts = z.object({
   mentees: z.int(),
   mentors: z.int(),
   places: z.int(),
+  /** Submitted, not yet admitted or put on the waiting list. */
+  undecided: z.int(),
   waitingList: z.int(),
   withdrawn: z.int(),
   runs: z.int(),

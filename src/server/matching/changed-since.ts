@@ -2,7 +2,8 @@ import type { MatchingInput } from '../../../shared/matching/matching-input';
 import type { MatchingSettings } from '../../../shared/matching/matching-contract';
 import type { Plan } from '../../../shared/matching/runs-contract';
 import { inTransaction, type Context } from '../platform';
-import type { ApplicantFacts, CycleRow } from './cycle-facts-queries';
+import type { CycleRow } from '../cycles';
+import type { ApplicantFacts } from './cycle-facts-queries';
 import { gatherInput } from './gather-input';
 
 type Change = Plan['changedSince'][number];

@@ -1,27 +1,6 @@
 import { and, asc, eq, inArray, sql } from 'drizzle-orm';
-import { applications, cycles, people, profiles } from '../../../drizzle/schema';
-import type { CyclePhase } from '../../../shared/cycles/cycles-contract';
+import { applications, people, profiles } from '../../../drizzle/schema';
 import type { Db } from '../platform';
-
-export type CycleRow = typeof cycles.$inferSelect;
-
-export async function findCycle(db: Db, cycleId: string): Promise<CycleRow | null> {
-  const [row] = await db.select().from(cycles).where(eq(cycles.id, cycleId));
-  return row ?? null;
-}
-
-/** The same, held until the transaction ends, so that two deeds on one cycle wait for each other. */
-export async function holdCycle(db: Db, cycleId: string): Promise<CycleRow | null> {
-  const [row] = await db.select().from(cycles).where(eq(cycles.id, cycleId)).for('update');
-  return row ?? null;
-}
-
-export async function movePhase(db: Db, cycleId: string, to: CyclePhase): Promise<void> {
-  await db
-    .update(cycles)
-    .set({ phase: to, version: sql`${cycles.version} + 1` })
-    .where(eq(cycles.id, cycleId));
-}
 
 /** What pages and messages say of an applicant. */
 export interface ApplicantFacts {

@@ -4,9 +4,9 @@ import { NEVER_OVERRIDDEN } from '../../../shared/matching/catalogue';
 import { explainPair } from '../../../shared/matching/explain-pair';
 import type { PairDecisionForm, PairDecisions } from '../../../shared/matching/runs-contract';
 import { recordAudit } from '../audit';
-import { findCycle, holdCycle } from '../cycles';
+import { findCycle, holdCycle, type CycleRow } from '../cycles';
 import { actorOf, inTransaction, notFound, Problem, violatedConstraint, type Context } from '../platform';
-import { findApplicants, type CycleRow } from './cycle-facts-queries';
+import { findApplicants } from './cycle-facts-queries';
 import { deleteDecision, listDecisions, saveDecision } from './decisions-queries';
 import { gatherInput } from './gather-input';
 

@@ -4,7 +4,7 @@ import { sharedThings } from '../../../shared/matching/shared-things';
 import type { PublishOutcome } from '../../../shared/matching/runs-contract';
 import { findAssociation, type AssociationRow } from '../accounts';
 import { recordAll, recordAudit } from '../audit';
-import { holdCycle, movePhase } from '../cycles';
+import { holdCycle, movePhase, type CycleRow } from '../cycles';
 import { postMessages, type OutgoingMessage } from '../messages';
 import {
   actorOf,
@@ -20,7 +20,7 @@ import {
 } from '../platform';
 import { loadProfiles } from '../profiles';
 import { changedSince } from './changed-since';
-import { listApplicants, type CycleRow } from './cycle-facts-queries';
+import { listApplicants } from './cycle-facts-queries';
 import { answersDue, dueInWords } from './deadlines';
 import { messagePerson, proposalMessage, PROPOSAL_PURPOSE, type MessagePerson } from './proposal-messages';
 import {

@@ -1,6 +1,6 @@
 import type { RunLine, RunList } from '../../../shared/matching/runs-contract';
 import { notFound, type Context } from '../platform';
-import { findCycle } from './cycle-facts-queries';
+import { findCycle } from '../cycles';
 import { findListedRun, listRuns, type ListedRun } from './runs-queries';
 
 /** One place where a run's row becomes its line. */

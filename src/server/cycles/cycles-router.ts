@@ -1,0 +1,106 @@
+import {
+  Cycle,
+  CycleDraft,
+  CycleList,
+  CycleParams,
+  CycleSettings,
+  CycleToApply,
+  NewCycle,
+  PhaseMove,
+  SettingsHistory,
+} from '../../../shared/cycles/cycles-contract';
+import { MatchingSettings } from '../../../shared/matching/matching-contract';
+import { route, type Route } from '../platform';
+import { saveSettings, showSettings, showSettingsHistory } from './cycle-settings';
+import { createCycle, editCycle } from './edit-cycle';
+import { moveCycle } from './move-cycle';
+import { showCycle, showCycles, showCycleToApply } from './show-cycles';
+
+export const cyclesRoutes: Route[] = [
+  route({
+    method: 'get',
+    path: '/api/cycles',
+    may: ['anyone'],
+    summary: 'Cycles; drafts and cancelled ones for coordinators alone',
+    answer: CycleList,
+    handle: (ctx) => showCycles(ctx),
+  }),
+  route({
+    method: 'post',
+    path: '/api/cycles',
+    may: ['coordinator'],
+    summary: 'Make a new cycle',
+    status: 201,
+    body: NewCycle,
+    answer: Cycle,
+    handle: (ctx, { body }) => createCycle(ctx, body),
+  }),
+  route({
+    method: 'get',
+    path: '/api/cycles/:cycleId/summary',
+    may: ['anyone'],
+    summary: 'A cycle as applicants see it, with the consent text',
+    params: CycleParams,
+    answer: CycleToApply,
+    handle: (ctx, { params }) => showCycleToApply(ctx, params.cycleId),
+  }),
+  route({
+    method: 'get',
+    path: '/api/cycles/:cycleId',
+    may: ['coordinator'],
+    summary: 'A cycle with its counts and check-list',
+    params: CycleParams,
+    answer: Cycle,
+    handle: (ctx, { params }) => showCycle(ctx, params.cycleId),
+  }),
+  route({
+    method: 'put',
+    path: '/api/cycles/:cycleId',
+    may: ['coordinator'],
+    summary: 'Change name, dates and texts of a cycle',
+    versioned: true,
+    params: CycleParams,
+    body: CycleDraft,
+    answer: Cycle,
+    handle: (ctx, { params, body, version }) => editCycle(ctx, params.cycleId, body, version),
+  }),
+  route({
+    method: 'post',
+    path: '/api/cycles/:cycleId/phase',
+    may: ['coordinator'],
+    summary: 'Move a cycle on or back, or cancel it',
+    params: CycleParams,
+    body: PhaseMove,
+    answer: Cycle,
+    handle: (ctx, { params, body }) => moveCycle(ctx, params.cycleId, body),
+  }),
+  route({
+    method: 'get',
+    path: '/api/cycles/:cycleId/settings',
+    may: ['coordinator'],
+    summary: 'Rules, criteria and weights of a cycle',
+    params: CycleParams,
+    answer: CycleSettings,
+    handle: (ctx, { params }) => showSettings(ctx, params.cycleId),
+  }),
+  route({
+    method: 'put',
+    path: '/api/cycles/:cycleId/settings',
+    may: ['coordinator'],
+    summary: 'Save rules, criteria and weights',
+    versioned: true,
+    params: CycleParams,
+    body: MatchingSettings,
+    answer: CycleSettings,
+    handle: (ctx, { params, body, version }) => saveSettings(ctx, params.cycleId, body, version),
+  }),
+  route({
+    method: 'get',
+    path: '/api/cycles/:cycleId/settings/history',
+    may: ['coordinator'],
+    summary: 'Who changed rules and criteria, and when',
+    params: CycleParams,
+    answer: SettingsHistory,
+    handle: (ctx, { params }) => showSettingsHistory(ctx, params.cycleId),
+  }),
+];
