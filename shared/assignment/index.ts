@@ -9,3 +9,6 @@ export { priceOfBarring, priceOfChoice, priceOfPartner, pricesOfPartners, type C
 export { tradeOff, type TradeOffPoint } from './trade-off';
 export { repairWithout, standbys } from './standbys';
 export { steadiness } from './steadiness';
+export { explainShortage, isPerfectOnBothSides, leftOutByChoice, smallestReason, type ShortageGroup } from './shortage';
+export { gainFromNewMentor, gainFromPairs, gainFromPlaces, gainWithoutLock, mentorsWhosePlaceHelps } from './remedies';
+export { blockingPairs } from './stability';
