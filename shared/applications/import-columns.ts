@@ -35,7 +35,7 @@ export const REQUIRED_FIELDS: readonly ImportField[] = ['name', 'email', 'side']
 const SYNONYMS: Record<ImportField, string> = {
   name: 'name fullname membername member applicant person nameofmember applicantname surnameandname displayname',
   email: 'email mail emailaddress mailaddress address emailaddr contactemail emailcontact contact',
-  side: 'side role applyingas appliesas participation mentorormentee programmerole type joinsas takespartas',
+  side: 'side role applyingas appliesas participation mentorormentee programmerole type joinsas takespartas takingpartas',
   places: 'places numberofplaces capacity mentees menteestaken numberofmentees placesoffered maxmentees',
   oneMoreIfAsked: 'onemoreifasked onemore extraplace additionalplace couldtakeonemore onemoreplace',
   membershipNumber: 'membershipnumber membershipno memberno membernumber memberid membershipid number no',

@@ -139,6 +139,9 @@ class RowReader {
       profile: this.profile(cell),
     };
     this.noteRepeated(row);
+    const { wishedYearsMin: least, wishedYearsMax: most } = row.profile.wishes;
+    if (typeof least === 'number' && typeof most === 'number' && least > most)
+      this.fault(line.line, 'wishedYearsMax', String(most), 'The lower number of years comes first');
     return this.faults.length === before ? row : null;
   }
 

@@ -9,6 +9,7 @@ import {
   insertAssociation,
   inviteFirstAdministrator,
 } from './accounts';
+import { applicationsRoutes } from './applications';
 import { createMailTransport, messagesRoutes, startDelivery } from './messages';
 import { createApi, type Api } from './platform/app';
 import type { Context, Enqueue } from './platform/context';
@@ -21,7 +22,13 @@ import type { Settings } from './platform/settings';
 import { profilesRoutes } from './profiles';
 import { tagsRoutes } from './tags';
 
-export const ROUTES: readonly Route[] = [...accountsRoutes, ...messagesRoutes, ...tagsRoutes, ...profilesRoutes];
+export const ROUTES: readonly Route[] = [
+  ...accountsRoutes,
+  ...messagesRoutes,
+  ...tagsRoutes,
+  ...profilesRoutes,
+  ...applicationsRoutes,
+];
 
 export interface Backend {
   api: Api;

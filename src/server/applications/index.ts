@@ -1,0 +1,2 @@
+export { applicationsRoutes } from './applications-router';
+export { submitApplication, type Submission } from './submit-application';
