@@ -10,7 +10,10 @@ import {
   inviteFirstAdministrator,
 } from './accounts';
 import { applicationsRoutes } from './applications';
+import { cyclesRoutes } from './cycles';
+import { matchingRoutes, questionThread, reviveRuns, workRun } from './matching';
 import { createMailTransport, messagesRoutes, startDelivery } from './messages';
+import { keepDeadlines, pairingsRoutes } from './pairings';
 import { createApi, type Api } from './platform/app';
 import type { Context, Enqueue } from './platform/context';
 import { openDatabase, type Database } from './platform/database';
@@ -27,7 +30,10 @@ export const ROUTES: readonly Route[] = [
   ...messagesRoutes,
   ...tagsRoutes,
   ...profilesRoutes,
+  ...cyclesRoutes,
   ...applicationsRoutes,
+  ...matchingRoutes,
+  ...pairingsRoutes,
 ];
 
 export interface Backend {
@@ -80,6 +86,7 @@ export async function startBackend(settings: Settings): Promise<Backend> {
     async stop() {
       await stopWork();
       await jobs.stop();
+      await questionThread(settings.root).end();
       await database.close();
     },
   };
@@ -89,11 +96,17 @@ const contextFactory =
   (database: Database, settings: Settings, log: Logger, enqueue: Enqueue): (() => Context) =>
   () => ({ db: database.db, actor: null, now: () => new Date(), requestId: randomUUID(), settings, log, enqueue });
 
-async function startWork(_jobs: Jobs, context: () => Context, settings: Settings): Promise<() => Promise<void>> {
+/** Takes jobs, keeps the schedule and sends what is in the outbox, until stopped. */
+async function startWork({ boss }: Jobs, context: () => Context, settings: Settings): Promise<() => Promise<void>> {
   const stopDelivery = startDelivery(context(), createMailTransport(settings));
-  return async () => {
-    await stopDelivery();
-  };
+  await boss.work<{ runId: string }>('matching-run', { pollingIntervalSeconds: 0.5 }, async ([job]) => {
+    if (job) await workRun(context(), job.data.runId);
+  });
+  await boss.work('pairings-deadlines', () => keepDeadlines(context()));
+  await boss.work('housekeeping', () => reviveRuns(context()));
+  await boss.schedule('pairings-deadlines', '*/10 * * * *');
+  await boss.schedule('housekeeping', '* * * * *');
+  return stopDelivery;
 }
 
 async function notReady(database: Database, settings: Settings): Promise<string[]> {
