@@ -16,6 +16,32 @@ export const routes: Routes = [
     loadChildren: () => import('./profiles/profiles.routes').then((m) => m.profilesRoutes),
   },
   {
+    path: 'applications',
+    canActivate: [signedIn],
+    loadChildren: () => import('./applications/applications.routes').then((m) => m.applicationsRoutes),
+  },
+  { path: 'pairings', loadChildren: () => import('./pairings/pairings.routes').then((m) => m.pairingsRoutes) },
+  {
+    path: 'cycles/:cycleId',
+    canMatch: [(_route, segments) => segments[1]?.path !== 'new'],
+    canActivate: [withRole('coordinator')],
+    loadComponent: () => import('./cycles/cycle-frame/cycle-frame').then((m) => m.CycleFrame),
+    children: [
+      {
+        path: 'applications',
+        loadChildren: () => import('./applications/applicants.routes').then((m) => m.applicantsRoutes),
+      },
+      { path: 'matching', loadChildren: () => import('./matching/matching.routes').then((m) => m.matchingRoutes) },
+      { path: 'pairings', loadChildren: () => import('./pairings/responses.routes').then((m) => m.responsesRoutes) },
+      { path: '', loadChildren: () => import('./cycles/cycles.routes').then((m) => m.cycleRoutes) },
+    ],
+  },
+  {
+    path: 'cycles',
+    canActivate: [withRole('coordinator')],
+    loadChildren: () => import('./cycles/cycles.routes').then((m) => m.cyclesRoutes),
+  },
+  {
     path: 'messages',
     canActivate: [withRole('administrator')],
     loadChildren: () => import('./messages/messages.routes').then((m) => m.messagesRoutes),

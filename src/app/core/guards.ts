@@ -23,7 +23,9 @@ export const withRole =
 
 /** A path of this site to go to after signing in; anything else leads home. */
 export function safePath(next: string | undefined): string {
-  if (!next || !/^\/(?![/\\])/.test(next) || /[\u0000-\u001f\\]/.test(decodeURIComponentOr(next))) return '/';
+  if (!next || !/^\/(?![/\\])/.test(next)) return '/';
+  // Neither control characters nor backslashes, which some browsers read as slashes.
+  if ([...decodeURIComponentOr(next)].some((sign) => sign < ' ' || sign === '\\')) return '/';
   return next;
 }
 

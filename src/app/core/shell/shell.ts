@@ -58,6 +58,7 @@ export class Shell {
       home,
       { label: 'Profile', path: '/profiles', exact: false },
       { label: 'Applications', path: '/applications', exact: false },
+      { label: 'Pairs', path: '/pairings', exact: false },
       ...(this.session.hasRole('coordinator') ? [{ label: 'Cycles', path: '/cycles', exact: false }] : []),
       ...(this.session.hasRole('administrator')
         ? [
