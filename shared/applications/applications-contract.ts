@@ -50,6 +50,7 @@ export const OwnApplication = z.object({
   id: z.uuid(),
   cycleId: z.uuid(),
   cycleName: z.string(),
+  phase: CyclePhase,
   side: ApplicationSide,
   status: ApplicationStatus,
   places: z.int(),

@@ -10,13 +10,15 @@ import { actorOf, notFound, type Context, type Db } from '../platform';
 import { listApplicationsOf, listListedMentors, preferencesOf, type ApplicationRow } from './applications-queries';
 import { associationDay } from './association-day';
 
+type OwnRow = Awaited<ReturnType<typeof listApplicationsOf>>[number];
 type NamedPeople = OwnApplication['preferredMentors'];
 
 /** One place where a row becomes what its owner sees. */
-const toOwn = (row: ApplicationRow, cycleName: string, preferredMentors: NamedPeople): OwnApplication => ({
+const toOwn = ({ application: row, cycleName, phase }: OwnRow, preferredMentors: NamedPeople): OwnApplication => ({
   id: row.id,
   cycleId: row.cycleId,
   cycleName,
+  phase,
   side: row.side,
   status: row.status,
   places: row.places,
@@ -35,7 +37,7 @@ async function ownApplications(db: Db, personId: string, cycleId?: string): Prom
     db,
     rows.map((row) => row.application.id),
   );
-  return rows.map((row) => toOwn(row.application, row.cycleName, named.get(row.application.id) ?? []));
+  return rows.map((row) => toOwn(row, named.get(row.application.id) ?? []));
 }
 
 export async function showOwnApplications(ctx: Context): Promise<OwnApplications> {
