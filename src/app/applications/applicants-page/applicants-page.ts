@@ -14,6 +14,7 @@ import {
   type ApplicantsPage,
   ApplicantsQuery,
 } from '../../../../shared/applications/applications-contract';
+import { CycleStore } from '../../core/cycle-store';
 import { Notices } from '../../core/notices';
 import { orEmpty } from '../../core/query-inputs';
 import { confirmWith } from '../../ui/confirm-dialog/confirm-dialog';
@@ -21,6 +22,7 @@ import { EmptyState } from '../../ui/empty-state/empty-state';
 import { counted, PluralPipe } from '../../ui/format/plural-pipe';
 import { LoadProblem } from '../../ui/load-state/load-problem';
 import { Loading } from '../../ui/load-state/loading';
+import { PageHeader } from '../../ui/page-header/page-header';
 import { ApplicationsClient } from '../applications-client';
 import { openDrawer } from './applicant-drawer';
 import { ApplicantFilters } from './applicant-filters';
@@ -49,6 +51,7 @@ const DONE: Record<DecidedStatus, string> = {
     MatFormFieldModule,
     MatPaginator,
     MatSelectModule,
+    PageHeader,
     PluralPipe,
     RouterLink,
   ],
@@ -73,6 +76,7 @@ export class ApplicantsPageView {
   private readonly router = inject(Router);
   private readonly notices = inject(Notices);
   private readonly dialog = inject(MatDialog);
+  private readonly store = inject(CycleStore);
 
   protected readonly look = new TableLook();
   protected readonly columns = APPLICANT_COLUMNS.map((key) => ({ key, label: COLUMN_LABEL[key] }));
@@ -163,7 +167,7 @@ export class ApplicantsPageView {
     this.busy.set(false);
     this.refused.set(refused);
     this.chosen.set(new Map());
-    this.applicants.reload();
+    this.reload();
     const said = `${counted(changed.length, 'application', 'applications')} ${DONE[status]}`;
     const rest = refused.length > 0 ? `; ${counted(refused.length, 'stays', 'stay')} as before` : '';
     if (changed.length === 0) this.notices.say('Nothing was changed; the page says why');
@@ -186,12 +190,18 @@ export class ApplicantsPageView {
       .subscribe({
         next: () => {
           this.notices.say('Undone: the applications are as they were');
-          this.applicants.reload();
+          this.reload();
         },
         error: (error: unknown) => {
           this.notices.tell(error);
-          this.applicants.reload();
+          this.reload();
         },
       });
+  }
+
+  /** The frame's counts change with the table. */
+  private reload(): void {
+    this.applicants.reload();
+    this.store.reload();
   }
 }

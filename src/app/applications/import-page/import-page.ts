@@ -10,8 +10,10 @@ import {
 } from '../../../../shared/applications/applications-contract';
 import { mappingFor } from '../../../../shared/applications/import-columns';
 import type { ProblemDetails } from '../../../../shared/problems/problems';
+import { CycleStore } from '../../core/cycle-store';
 import { problemOf } from '../../core/problems';
 import { counted, PluralPipe } from '../../ui/format/plural-pipe';
+import { PageHeader } from '../../ui/page-header/page-header';
 import { ProblemSummary } from '../../ui/problem-summary/problem-summary';
 import { ApplicationsClient } from '../applications-client';
 import { keep, readKept } from '../kept';
@@ -24,7 +26,7 @@ const KEY = 'heddle-import-mapping';
 /** Coordinators bring in a list: choose the file, say what its columns mean, see what would happen, import it whole. */
 @Component({
   selector: 'app-import-page',
-  imports: [ImportFaults, MappingTable, MatButton, MatProgressBar, PluralPipe, ProblemSummary, RouterLink],
+  imports: [ImportFaults, MappingTable, MatButton, MatProgressBar, PageHeader, PluralPipe, ProblemSummary, RouterLink],
   templateUrl: './import-page.html',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
@@ -32,6 +34,8 @@ export class ImportPage {
   readonly cycleId = input.required<string>();
 
   private readonly client = inject(ApplicationsClient);
+  private readonly store = inject(CycleStore);
+  protected readonly crumbs = computed(() => [{ label: 'Applicants', link: `/cycles/${this.cycleId()}/applications` }]);
   protected readonly file = signal<ChosenFile | null>(null);
   protected readonly preview = signal<ImportPreview | null>(null);
   protected readonly result = signal<ImportResult | null>(null);
@@ -81,6 +85,7 @@ export class ImportPage {
       .pipe(finalize(() => this.busy.set('')))
       .subscribe({
         next: (result) => {
+          this.store.reload();
           this.result.set(result);
           this.preview.set(null);
           this.file.set(null);
