@@ -1,0 +1,81 @@
+/** The project's folder, its packages and its build. */
+import { createHash, randomBytes } from 'node:crypto';
+import { existsSync, mkdirSync, readdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { dirname, join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { must } from './run.mjs';
+import { step } from './say.mjs';
+
+export const ROOT = dirname(dirname(dirname(fileURLToPath(import.meta.url))));
+/** What this machine keeps between starts: the cluster, its password, the session secret. Not in the repository. */
+export const DATA = join(ROOT, '.data');
+export const bin = (name) => join(ROOT, 'node_modules/.bin', name);
+
+/** A file that is written once and read ever after; only its owner may read it. */
+export function kept(name, make) {
+  const path = join(DATA, name);
+  if (existsSync(path)) return readFileSync(path, 'utf8').trim();
+  mkdirSync(DATA, { recursive: true });
+  const value = make();
+  writeFileSync(path, `${value}\n`, { mode: 0o600 });
+  return value;
+}
+
+export const randomSecret = () => randomBytes(32).toString('hex');
+
+const hashOf = (paths) => {
+  const hash = createHash('sha256');
+  for (const path of paths) hash.update(path).update(readFileSync(join(ROOT, path)));
+  return hash.digest('hex');
+};
+
+const isCurrent = (marker, hash) => existsSync(marker) && readFileSync(marker, 'utf8') === hash;
+
+/** Installs the packages of package-lock.json where they are missing or stale. */
+export async function ensurePackages() {
+  const marker = join(ROOT, 'node_modules/.heddle-lock');
+  const hash = hashOf(['package-lock.json']);
+  if (isCurrent(marker, hash)) return;
+  await step('Installing packages (npm ci)', async () => {
+    await must(
+      'The packages could not be installed. Check that the npm registry can be reached, then run this again.',
+      process.platform === 'win32' ? 'npm.cmd' : 'npm',
+      ['ci', '--no-audit', '--no-fund', '--loglevel=error'],
+      { cwd: ROOT },
+    );
+    writeFileSync(marker, hash);
+  });
+}
+
+function filesOf(path) {
+  return readdirSync(join(ROOT, path), { withFileTypes: true }).flatMap((entry) => {
+    const inside = `${path}/${entry.name}`;
+    return entry.isDirectory() ? filesOf(inside) : [inside];
+  });
+}
+
+function sources() {
+  const folders = ['src', 'shared', 'drizzle', 'public'].flatMap(filesOf).filter((path) => !/\.spec\.ts$/.test(path));
+  const files = ['server.ts', 'angular.json', 'package-lock.json', 'tsconfig.json', 'tsconfig.app.json'];
+  return [...folders, ...files, 'scripts/build-server.mjs'].sort();
+}
+
+/** Builds where sources have changed since the last build. */
+export async function ensureBuild() {
+  const marker = join(ROOT, 'dist/.heddle-sources');
+  const hash = hashOf(sources());
+  if (isCurrent(marker, hash)) return;
+  await step('Building (the first time takes a minute or two)', build);
+  writeFileSync(marker, hash);
+}
+
+export async function build() {
+  const options = { cwd: ROOT, env: { ...process.env, NG_CLI_ANALYTICS: 'false', CI: '1' } };
+  await must('The application could not be built; the compiler says:', bin('ng'), ['build'], options);
+  await buildJobs();
+}
+
+export const buildJobs = () =>
+  must('The background jobs could not be built; the compiler says:', process.execPath, ['scripts/build-server.mjs'], {
+    cwd: ROOT,
+  });
