@@ -109,6 +109,11 @@ describe('the coordinators’ table', () => {
     expect(undone.body.changed).toHaveLength(2);
     const withdrawn = await decide(coordinator, cycleId, 'withdrawn', [first]);
     expect(withdrawn.body.changed).toHaveLength(1);
+    const told = await app.rows<{ data: { byCoordinator: boolean } }>(
+      "select data from messages where template = 'applications/withdrawn' and address = $1",
+      [one.person.email],
+    );
+    expect(told.map((row) => row.data.byCoordinator)).toEqual([true]);
     expect((await decide(coordinator, cycleId, 'admitted', [first])).body.changed).toHaveLength(1);
     const audit = await app.rows<{ note: string }>(
       `select note from audit_entries where action = 'applications.decide' and subject_id = $1 order by id`,

@@ -52,6 +52,11 @@ describe('applying', () => {
         },
       },
     ]);
+    await app.deliver();
+    const [mail] = await app.rows<{ text: string }>('select text from mailbox where recipient = $1', [
+      client.person.email,
+    ]);
+    expect(mail?.text).toContain(`http://localhost:4000/applications/${cycleId}`);
     const audit = await app.rows<{ action: string }>('select action from audit_entries where subject_id = $1', [
       answer.body.id,
     ]);
@@ -191,6 +196,11 @@ describe('applying', () => {
     });
     await setPhase(app, before, 'cancelled');
   });
+});
+
+it('describes its addresses', async () => {
+  const answer = await (await app.visitor()).get<{ paths: Record<string, unknown> }>('/api/openapi.json');
+  expect(Object.keys(answer.body.paths).filter((path) => path.startsWith('/api/applications'))).toHaveLength(11);
 });
 
 describe('withdrawing', () => {

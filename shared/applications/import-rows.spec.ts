@@ -151,6 +151,7 @@ describe('words in cells', () => {
     expect(readLanguage('Danish (first language)')).toEqual({ value: { code: 'da', level: 'first' } });
     expect(readLanguage('nb – native')).toEqual({ value: { code: 'nb', level: 'first' } });
     expect(languageCode('Romanian')).toBe('ro');
+    expect(languageCode('Norwegian')).toBe('nb');
     expect(readSlot('Thursday afternoons')).toEqual({ value: 'thu-afternoon' });
     expect(readSlot('Fri p.m.')).toEqual({ value: 'fri-afternoon' });
   });

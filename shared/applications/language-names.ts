@@ -18,5 +18,7 @@ function knownCodes(): Map<string, string> {
 /** The ISO 639-1 code of a language given by its English name or its code, in any case; null where it is not known. */
 export function languageCode(text: string): string | null {
   codes ??= knownCodes();
-  return codes.get(folded(text.trim())) ?? null;
+  const code = codes.get(folded(text.trim())) ?? null;
+  // “Norwegian” alone means the more common of its two written forms, which is what profiles offer.
+  return code === 'no' ? 'nb' : code;
 }

@@ -1,7 +1,11 @@
 import { and, asc, count, eq, ilike, inArray, or, sql, type SQL } from 'drizzle-orm';
 import type { z } from 'zod';
 import { applications, auditEntries, pairings, people, profiles, profileTags, tags } from '../../../drizzle/schema';
-import type { ApplicantsQuery, ApplicationStatus } from '../../../shared/applications/applications-contract';
+import type {
+  ApplicantsQuery,
+  ApplicationSide,
+  ApplicationStatus,
+} from '../../../shared/applications/applications-contract';
 import type { Db } from '../platform';
 import { anyFlag, completeness, FLAG } from './applicant-facts-queries';
 
@@ -128,8 +132,11 @@ export async function practiceAreasOf(db: Db, applicationIds: string[]): Promise
 
 export interface DecidedRow {
   id: string;
+  personId: string;
   name: string;
+  side: ApplicationSide;
   status: ApplicationStatus;
+  version: number;
   hasProposal: boolean;
   inPair: boolean;
   /** The applicant took it back, not a coordinator. */
@@ -144,8 +151,11 @@ export async function holdForDecision(db: Db, cycleId: string, ids: string[]): P
   return db
     .select({
       id: applications.id,
+      personId: applications.personId,
       name: people.name,
+      side: applications.side,
       status: applications.status,
+      version: applications.version,
       hasProposal: hasPairing('pending'),
       inPair: hasPairing('under-way'),
       ownWithdrawal: sql<boolean>`exists (select 1 from ${auditEntries} where ${auditEntries.subjectId} = ${applications.id}::text

@@ -7,6 +7,7 @@ import {
 import { recordAll } from '../audit';
 import { findCycle } from '../cycles';
 import { inTransaction, notFound, Problem, type Context } from '../platform';
+import { tellWithdrawn } from './application-messages';
 import { holdForDecision, setStatus, type DecidedRow } from './applicants-queries';
 import { withdrawProposals } from './withdraw-application';
 
@@ -22,7 +23,11 @@ export function decideAdmission(ctx: Context, cycleId: string, decision: Admissi
     const changed = judged.filter((each) => each.reason === null).map((each) => each.row);
     const changedIds = changed.map((row) => row.id);
     await setStatus(tx.db, changedIds, decision.status, tx.now());
-    if (decision.status === 'withdrawn') await withdrawProposals(tx, changedIds, cycleId);
+    if (decision.status === 'withdrawn') {
+      await withdrawProposals(tx, changedIds, cycleId);
+      const told = changed.map((row) => ({ ...row, version: row.version + 1 }));
+      await tellWithdrawn(tx, told, cycle, true);
+    }
     await recordAll(
       tx,
       changed.map((row) => ({

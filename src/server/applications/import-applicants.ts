@@ -1,18 +1,18 @@
 import type {
-  ApplicationStatus,
+  ApplicationSide,
   ImportPreview,
   ImportRequest,
   ImportResult,
 } from '../../../shared/applications/applications-contract';
 import type { ImportRow } from '../../../shared/applications/import-rows';
 import { completenessOf } from '../../../shared/profiles/profile-rules';
-import { ensurePerson } from '../accounts';
+import type { MentoringProfile } from '../../../shared/profiles/profiles-contract';
+import { ensurePerson, type PersonRow } from '../accounts';
 import { recordAll, recordAudit } from '../audit';
 import { inTransaction, Problem, type Context } from '../platform';
-import { loadProfiles } from '../profiles';
 import { leftOutBefore, updateApplication, type ApplicationRow } from './applications-queries';
 import { fillProfiles } from './fill-profiles';
-import { insertApplications } from './import-queries';
+import { chunksOf, insertApplications } from './import-queries';
 import { readImport, type ReadImport } from './read-import';
 
 const FAULTS_SHOWN = 200;
@@ -48,8 +48,8 @@ export function importApplicants(ctx: Context, cycleId: string, request: ImportR
     const read = await readImport(tx, cycleId, request);
     if (read.faults.length > 0) throw faulty(read);
     const people = await ensurePeople(tx, read);
-    await fillProfiles(tx, people);
-    const applications = await writeApplications(tx, read, people);
+    const profiles = await fillProfiles(tx, people);
+    const applications = await writeApplications(tx, read, people, profiles);
     await recordAudit(tx, { action: 'applications.import', subjectId: cycleId, cycleId });
     const created = new Set(people.filter((each) => each.created).map((each) => each.personId));
     const all = new Set(people.map((each) => each.personId));
@@ -83,70 +83,83 @@ export interface ImportedPerson {
 async function ensurePeople(tx: Context, { rows }: ReadImport): Promise<ImportedPerson[]> {
   const people: ImportedPerson[] = [];
   const created = new Set<string>();
-  for (const { row } of rows) {
-    const person = await ensurePerson(tx, {
+  for (const { row, person } of rows) {
+    if (person && isListedAlready(person, row)) {
+      people.push({ row, personId: person.id, created: false });
+      continue;
+    }
+    const ensured = await ensurePerson(tx, {
       email: row.email,
       name: row.name,
       ...(row.membershipNumber === undefined
         ? {}
         : { membershipNumber: row.membershipNumber, membershipCurrent: true }),
     });
-    if (person.created) created.add(person.id);
-    people.push({ row, personId: person.id, created: created.has(person.id) });
+    if (ensured.created) created.add(ensured.id);
+    people.push({ row, personId: ensured.id, created: created.has(ensured.id) });
   }
   return people;
 }
+
+const isListedAlready = (person: PersonRow, { membershipNumber }: ImportRow): boolean =>
+  membershipNumber === undefined || (person.membershipNumber === membershipNumber && person.membershipCurrent);
+
+type Content = Pick<ApplicationRow, 'places' | 'oneMoreIfAsked' | 'goals' | 'status'>;
+const CONTENT = ['places', 'oneMoreIfAsked', 'goals', 'status'] as const;
 
 async function writeApplications(
   tx: Context,
   { cycle, applications }: ReadImport,
   people: ImportedPerson[],
+  profiles: Map<string, MentoringProfile>,
 ): Promise<{ inserted: number; updated: number }> {
-  const personIds = [...new Set(people.map((each) => each.personId))];
-  const profiles = await loadProfiles(tx.db, personIds);
-  const leftOut = await leftOutBefore(tx.db, cycle, personIds);
+  const leftOut = await leftOutBefore(tx.db, cycle, [...profiles.keys()]);
   const existing = new Map(applications.map((each) => [`${each.side} ${each.personId}`, each]));
-  const statusFor = (personId: string): ApplicationStatus => {
-    const profile = profiles.get(personId);
-    return profile && completenessOf(profile).readyForMatching ? 'admitted' : 'submitted';
-  };
   const fresh: Parameters<typeof insertApplications>[1] = [];
-  const changed: ApplicationRow[] = [];
+  const known: ApplicationRow[] = [];
+  const changed: string[] = [];
   for (const { row, personId } of people)
     for (const side of row.sides) {
       const before = existing.get(`${side} ${personId}`);
-      const places = side === 'mentor' ? (row.places ?? before?.places ?? 1) : 0;
-      const content = {
-        places: Math.max(places, before?.taken ?? 0),
-        oneMoreIfAsked: side === 'mentor' && (row.oneMoreIfAsked ?? before?.oneMoreIfAsked ?? false),
-        goals: row.goals ?? before?.goals ?? '',
-      };
-      if (!before)
+      const content = contentOf(row, side, before, profiles.get(personId));
+      if (before) {
+        known.push(before);
+        if (CONTENT.every((field) => before[field] === content[field])) continue;
+        await updateApplication(tx.db, before.id, content);
+        changed.push(before.id);
+      } else
         fresh.push({
           ...content,
           cycleId: cycle.id,
           personId,
           side,
-          status: statusFor(personId),
           leftOutLastTime: side === 'mentee' && leftOut.has(personId),
           submittedAt: tx.now(),
           createdAt: tx.now(),
         });
-      else {
-        // A withdrawal and the waiting list stay as they are: the file does not know why they came about.
-        const status = before.status === 'submitted' ? statusFor(personId) : before.status;
-        const after = await updateApplication(tx.db, before.id, { ...content, status });
-        if (after) changed.push(after);
-      }
     }
   const inserted = await insertApplications(tx.db, fresh);
-  await recordAll(
-    tx,
-    [...inserted, ...changed].map((each) => ({
-      action: 'applications.import-line',
-      subjectId: each.id,
-      cycleId: cycle.id,
-    })),
-  );
-  return { inserted: inserted.length, updated: changed.length };
+  for (const ids of chunksOf([...inserted.map((each) => each.id), ...changed]))
+    await recordAll(
+      tx,
+      ids.map((subjectId) => ({ action: 'applications.import-line', subjectId, cycleId: cycle.id })),
+    );
+  return { inserted: inserted.length, updated: known.length };
+}
+
+function contentOf(
+  row: ImportRow,
+  side: ApplicationSide,
+  before: ApplicationRow | undefined,
+  profile: MentoringProfile | undefined,
+): Content {
+  const places = side === 'mentor' ? (row.places ?? before?.places ?? 1) : 0;
+  const complete = profile !== undefined && completenessOf(profile).readyForMatching;
+  return {
+    places: Math.max(places, before?.taken ?? 0),
+    oneMoreIfAsked: side === 'mentor' && (row.oneMoreIfAsked ?? before?.oneMoreIfAsked ?? false),
+    goals: row.goals ?? before?.goals ?? '',
+    // A decision, a withdrawal and the waiting list stay as they are: the file does not know why they came about.
+    status: before && before.status !== 'submitted' ? before.status : complete ? 'admitted' : 'submitted',
+  };
 }

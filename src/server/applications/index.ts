@@ -1,2 +1,3 @@
 export { applicationsRoutes } from './applications-router';
 export { submitApplication, type Submission } from './submit-application';
+export { withdrawApplication } from './withdraw-application';

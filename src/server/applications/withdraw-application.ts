@@ -23,7 +23,7 @@ export function withdrawApplication(ctx: Context, applicationId: string): Promis
     if (!after) throw notFound('application');
     await recordAudit(tx, { action: 'applications.withdraw', subjectId: applicationId, cycleId: cycle.id });
     await withdrawProposals(tx, [applicationId], cycle.id);
-    await tellWithdrawn(tx, after, cycle);
+    await tellWithdrawn(tx, [after], cycle, false);
     return showOwn(tx, after);
   });
 }

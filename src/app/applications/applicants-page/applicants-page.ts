@@ -141,7 +141,7 @@ export class ApplicantsPageView {
     const lines = [...this.chosen().values()];
     confirmWith(this.dialog, {
       title: `Withdraw ${counted(lines.length, 'application', 'applications')}?`,
-      text: 'These applicants take no part in the cycle. Proposals that wait for answers are taken back and do not return with undo. No message is sent; tell the applicants yourself.',
+      text: 'These applicants take no part in the cycle. Each of them gets a message that says so. Undo brings the applications back, but neither messages nor proposals that are taken back now.',
       affectedLabel: 'Applications that are withdrawn:',
       affected: lines.map((line) => `${line.name}, ${line.side}`),
       confirm: 'Withdraw',

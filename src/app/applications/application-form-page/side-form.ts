@@ -88,7 +88,10 @@ export class SideForm {
   constructor() {
     effect(() => {
       const own = this.own();
-      untracked(() => this.fill(own));
+      // A form that is being filled keeps what was typed, also when the other side was sent meanwhile.
+      untracked(() => {
+        if (!this.open()) this.fill(own);
+      });
     });
   }
 
