@@ -1,13 +1,5 @@
-import {
-  afterNextRender,
-  DOCUMENT,
-  inject,
-  Injectable,
-  Pipe,
-  type PipeTransform,
-  REQUEST,
-  signal,
-} from '@angular/core';
+import { afterNextRender, inject, Injectable, Pipe, type PipeTransform, signal } from '@angular/core';
+import { Cookies } from './cookies';
 import { SessionStore } from './session-store';
 
 const COOKIE = 'heddle-zone';
@@ -15,15 +7,14 @@ const COOKIE = 'heddle-zone';
 /** The viewer's time zone. The server learns it from a cookie that the browser sets; until then it is the association's. */
 @Injectable({ providedIn: 'root' })
 export class ViewerZone {
-  private readonly document = inject(DOCUMENT);
-  private readonly request = inject(REQUEST, { optional: true });
+  private readonly cookies = inject(Cookies);
   private readonly session = inject(SessionStore);
   private readonly known = signal<string | null>(this.fromCookie());
 
   constructor() {
     afterNextRender(() => {
       const zone = Intl.DateTimeFormat().resolvedOptions().timeZone;
-      this.document.cookie = `${COOKIE}=${encodeURIComponent(zone)}; path=/; max-age=31536000; samesite=lax`;
+      this.cookies.write(COOKIE, zone);
       this.known.set(zone);
     });
   }
@@ -33,11 +24,9 @@ export class ViewerZone {
   }
 
   private fromCookie(): string | null {
-    const cookies = this.request?.headers.get('cookie') ?? this.document.cookie ?? '';
-    const kept = new RegExp(`(?:^|;\\s*)${COOKIE}=([^;]+)`).exec(cookies)?.[1];
-    if (!kept) return null;
+    const zone = this.cookies.read(COOKIE);
+    if (!zone) return null;
     try {
-      const zone = decodeURIComponent(kept);
       new Intl.DateTimeFormat('en', { timeZone: zone });
       return zone;
     } catch {

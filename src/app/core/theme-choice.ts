@@ -1,4 +1,5 @@
-import { DOCUMENT, inject, Injectable, REQUEST, signal } from '@angular/core';
+import { DOCUMENT, inject, Injectable, signal } from '@angular/core';
+import { Cookies } from './cookies';
 
 export type Theme = 'system' | 'light' | 'dark';
 const COOKIE = 'heddle-theme';
@@ -7,19 +8,17 @@ const COOKIE = 'heddle-theme';
 @Injectable({ providedIn: 'root' })
 export class ThemeChoice {
   private readonly document = inject(DOCUMENT);
-  private readonly request = inject(REQUEST, { optional: true });
+  private readonly cookies = inject(Cookies);
   private readonly chosen = signal<Theme>('system');
   readonly theme = this.chosen.asReadonly();
 
   start(): void {
-    const cookies = this.request?.headers.get('cookie') ?? this.document.cookie ?? '';
-    const kept = new RegExp(`(?:^|;\\s*)${COOKIE}=(light|dark)`).exec(cookies)?.[1];
+    const kept = this.cookies.read(COOKIE);
     this.apply(kept === 'light' || kept === 'dark' ? kept : 'system');
   }
 
   choose(theme: Theme): void {
-    const life = theme === 'system' ? 0 : 365 * 24 * 3600;
-    this.document.cookie = `${COOKIE}=${theme}; path=/; max-age=${life}; samesite=lax`;
+    this.cookies.write(COOKIE, theme === 'system' ? null : theme);
     this.apply(theme);
   }
 
