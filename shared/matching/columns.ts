@@ -222,7 +222,7 @@ function coverOf(
   const raise = (at: number | undefined, to: number): void => {
     if (at !== undefined && row[at]! < to) row[at] = to;
   };
-  const offered = new Set(mentor.offers);
+  const offered = new Set(mentor.offers.map((choice) => choice.tagId));
   for (const id of offered) {
     raise(index.get(id), COVER.same);
     const parent = tags[index.get(id) ?? -1]?.parent;

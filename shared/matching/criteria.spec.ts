@@ -3,9 +3,13 @@ import { matchingInput, menteeInput, mentorInput, settingsWith } from '../../tes
 import { judgeOf } from './build-problem';
 import { fitOf, MISSING } from './criteria';
 import type { CriterionKey } from './matching-contract';
-import type { MenteeInput, MentorInput } from './matching-input';
+import type { MenteeInput } from './matching-input';
 
-function score(criterion: CriterionKey, mentee: Partial<MenteeInput>, mentor: Partial<MentorInput>): number {
+function score(
+  criterion: CriterionKey,
+  mentee: Partial<MenteeInput>,
+  mentor: Parameters<typeof mentorInput>[1],
+): number {
   const judge = judgeOf(matchingInput([menteeInput('a', mentee)], [mentorInput('b', mentor)]));
   return judge.criteria.find((each) => each.key === criterion)!.score(0, 0);
 }

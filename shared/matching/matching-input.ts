@@ -45,8 +45,7 @@ export interface MenteeInput extends ApplicantInput {
 }
 
 export interface MentorInput extends ApplicantInput {
-  /** Ids of the tags offered. */
-  offers: string[];
+  offers: TagChoice[];
   wishedStages: CareerStage[];
   /** Places to give in this run. */
   places: number;

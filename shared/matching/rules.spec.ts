@@ -2,13 +2,13 @@ import { describe, expect, it } from 'vitest';
 import { matchingInput, menteeInput, mentorInput, settingsWith } from '../../tests/support/matching-people';
 import { judgeOf } from './build-problem';
 import { explainPair } from './explain-pair';
-import type { MatchingInput, MenteeInput, MentorInput } from './matching-input';
+import type { MatchingInput, MenteeInput } from './matching-input';
 
 const reasons = (input: MatchingInput): string[] =>
   explainPair(judgeOf(input), 0, 0).reasons.map((reason) => reason.rule);
 const between = (
   mentee: Partial<MenteeInput>,
-  mentor: Partial<MentorInput>,
+  mentor: Parameters<typeof mentorInput>[1],
   change: Partial<MatchingInput> = {},
 ): string[] => reasons(matchingInput([menteeInput('a', mentee)], [mentorInput('b', mentor)], change));
 

@@ -31,13 +31,16 @@ export const menteeInput = (key: string, change: Partial<MenteeInput> = {}): Men
   ...change,
 });
 
-export const mentorInput = (key: string, change: Partial<MentorInput> = {}): MentorInput => ({
+/** `offers` by tag id alone: priorities of offers change nothing. */
+type MentorChange = Partial<Omit<MentorInput, 'offers'>> & { offers?: string[] };
+
+export const mentorInput = (key: string, { offers = ['gis'], ...change }: MentorChange = {}): MentorInput => ({
   ...common,
   key,
   person: `person-${key}`,
   employer: 'Thornfield Mapping',
   yearsInPractice: 10,
-  offers: ['gis'],
+  offers: offers.map((tagId) => ({ tagId, priority: 1 })),
   wishedStages: [],
   places: 1,
   taken: 0,

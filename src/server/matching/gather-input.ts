@@ -71,7 +71,7 @@ export async function gatherInput(
   });
   const toMentor = (row: ApplicantRow): MentorInput => ({
     ...common(row),
-    offers: choices(row, 'offers').map(({ tagId }) => tagId),
+    offers: choices(row, 'offers').map(({ tagId, priority }) => ({ tagId, priority })),
     wishedStages: row.wishedStages,
     places: row.places - row.taken,
     taken: row.taken,

@@ -72,17 +72,15 @@ export async function showPlan(ctx: Context, runId: string): Promise<Plan> {
 
 type Positioned = MatchingInput['mentees'][number] | MatchingInput['mentors'][number];
 
-/** First practice area by priority for mentees, by the vocabulary's order for mentors. */
+/** Names each with the practice area that comes first for them. */
 function personOf(
   facts: ReadonlyMap<string, ApplicantFacts>,
   input: MatchingInput,
 ): (who: Positioned, places: number) => PlanPerson {
   const areas = new Map(input.tags.filter((tag) => tag.kind === 'practice-area').map((tag) => [tag.id, tag.label]));
   return (who, places) => {
-    const tagIds =
-      'seeks' in who
-        ? [...who.seeks].sort((a, b) => a.priority - b.priority).map((choice) => choice.tagId)
-        : who.offers;
+    const chosen = 'seeks' in who ? who.seeks : who.offers;
+    const tagIds = [...chosen].sort((a, b) => a.priority - b.priority).map((choice) => choice.tagId);
     const fact = facts.get(who.key);
     return {
       applicationId: who.key,

@@ -26,7 +26,7 @@ const WORK: Partial<Record<CyclePhase, { path: string; text: string }>> = {
         <ul class="plain-list line-list">
           @for (entry of entries(); track entry.cycle.id) {
             <li class="spread">
-              <span>
+              <span class="cluster">
                 <a [routerLink]="entry.link"
                   ><b>{{ entry.cycle.name }}</b></a
                 >

@@ -13,7 +13,7 @@ import { whereabouts } from './plan-view';
         @for (entry of people(); track entry.person.applicationId) {
           <li>
             <div class="spread">
-              <span>
+              <span class="cluster">
                 <button type="button" class="link-button" (click)="opened.emit(entry.person.applicationId)">
                   {{ entry.person.name }}
                 </button>

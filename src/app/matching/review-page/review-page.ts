@@ -5,6 +5,7 @@ import { MatCheckbox } from '@angular/material/checkbox';
 import { MatDialog } from '@angular/material/dialog';
 import { Router, RouterLink } from '@angular/router';
 import { filter } from 'rxjs';
+import { CycleStore } from '../../core/cycle-store';
 import { MomentPipe } from '../../core/moments';
 import { Notices } from '../../core/notices';
 import { problemOf } from '../../core/problems';
@@ -41,6 +42,7 @@ export class ReviewPage {
   private readonly dialog = inject(MatDialog);
   private readonly router = inject(Router);
   private readonly notices = inject(Notices);
+  private readonly store = inject(CycleStore);
   protected readonly resource = this.client.review(this.runId);
   protected readonly review = computed(() => (this.resource.hasValue() ? this.resource.value() : null));
   protected readonly acknowledged = new FormControl(false, { nonNullable: true });
@@ -79,6 +81,7 @@ export class ReviewPage {
         this.notices.say(
           `Round ${outcome.round} is published: ${counted(outcome.proposals, 'proposal', 'proposals')}. Answers will appear here.`,
         );
+        this.store.reload();
         void this.router.navigate(['/cycles', this.cycleId(), 'pairings']);
       },
       error: (error: unknown) => {

@@ -1,9 +1,10 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, effect, inject, input } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
 import { filter, interval } from 'rxjs';
 import { RUN_STATE_LABEL, type PairDecisions, type RunLine } from '../../../../shared/matching/runs-contract';
+import { CycleStore } from '../../core/cycle-store';
 import { MomentPipe } from '../../core/moments';
 import { Notices } from '../../core/notices';
 import { EmptyState } from '../../ui/empty-state/empty-state';
@@ -32,6 +33,7 @@ export class RunsPage {
 
   private readonly client = inject(MatchingClient);
   private readonly notices = inject(Notices);
+  private readonly store = inject(CycleStore);
   protected readonly stateLabel = RUN_STATE_LABEL;
   protected readonly runs = this.client.runs(this.cycleId);
   protected readonly decisions = this.client.decisions(this.cycleId);
@@ -48,7 +50,16 @@ export class RunsPage {
       .slice(0, 2),
   );
 
+  private readonly finishedCount = computed(() => (this.runs.hasValue() ? this.finished().length : null));
+
   constructor() {
+    // The frame around this page counts runs too.
+    let before: number | null = null;
+    effect(() => {
+      const now = this.finishedCount();
+      if (before !== null && now !== null && now !== before) this.store.reload();
+      before = now ?? before;
+    });
     interval(BUSY_MS)
       .pipe(
         filter((tick) => this.working() !== null || tick % CALM_TICKS === 0),

@@ -19,7 +19,7 @@ import { ShareBar } from '../../ui/share-bar/share-bar';
       @if (completeness().missing.length > 0) {
         <ul class="line-list plain-list">
           @for (item of completeness().missing; track item.text) {
-            <li>
+            <li class="cluster">
               <a [href]="'/profiles/mine#section-' + item.section">{{ item.text }}</a>
               @if (item.needed) {
                 <span class="badge badge--waiting">needed</span>
