@@ -161,6 +161,8 @@ if (isMainModule(import.meta.url)) {
 // Under `ng serve` the CLI's own server asks this handler; it starts the backend at the first request.
 let developed: Promise<express.Express> | null = null;
 export const reqHandler = createNodeRequestHandler(async (req, res, next) => {
+  // The build asks too, while it lists the routes; there is no database then.
+  if (!process.env['DATABASE_URL']) return void res.writeHead(503).end();
   developed ??= (async () => {
     const settings = readSettings(process.env);
     const app = express();

@@ -85,22 +85,27 @@ function remediesOf(
   ];
 }
 
-/** Mentors who said "one more if asked" are named first by the page; the gain of all of them together is exact. */
+/** Mentors who said "one more if asked" come first; the gain of all of them together is exact. */
 function placeRemedies(
   { problem, options, judge }: BuiltProblem,
   plan: PairingPlan,
   group: ShortageGroup,
   helps: Uint8Array,
 ): Remedy[] {
-  const helpful = [...group.mentors].filter((mentor) => helps[mentor]);
+  const would = (mentor: number): number => Number(judge.input.mentors[mentor]!.oneMoreIfAsked);
+  const helpful = [...group.mentors].filter((mentor) => helps[mentor]).sort((a, b) => would(b) - would(a) || a - b);
   if (helpful.length === 0) return [];
   const gain = gainFromPlaces(problem, plan, helpful, options);
-  const count = helpful.length === 1 ? 'One mentor' : `Each of ${helpful.length} mentors`;
+  const asked = helpful.filter(would).length;
+  const each =
+    helpful.length === 1 ? 'It pairs one more' : `One more at any of ${helpful.length} mentors pairs one more`;
+  const together = helpful.length === 1 ? '' : `, at all of them ${gain} more`;
+  const said = asked === 0 ? '' : `; ${asked} of them said "one more if asked"`;
   return [
     {
       kind: 'more-places',
-      label: helpful.length === 1 ? 'One more place at this mentor' : 'One more place at any of these mentors',
-      detail: `${count} taking one more pairs one more; all of them together ${gain} more.`,
+      label: helpful.length === 1 ? 'One more place at this mentor' : 'One more place',
+      detail: `${each}${together}${said}.`,
       gain,
       mentors: helpful.map((mentor) => judge.input.mentors[mentor]!.key),
       rule: null,

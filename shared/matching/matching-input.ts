@@ -49,6 +49,8 @@ export interface MentorInput extends ApplicantInput {
   wishedStages: CareerStage[];
   /** Places to give in this run. */
   places: number;
+  /** Would take one more if asked; changes no plan, but names who to ask first. */
+  oneMoreIfAsked: boolean;
   /** Places given away in earlier rounds. */
   taken: number;
 }

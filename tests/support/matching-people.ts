@@ -44,6 +44,7 @@ export const mentorInput = (key: string, { offers = ['gis'], ...change }: Mentor
   wishedStages: [],
   places: 1,
   taken: 0,
+  oneMoreIfAsked: false,
   ...change,
 });
 

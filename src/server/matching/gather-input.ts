@@ -75,6 +75,7 @@ export async function gatherInput(
     wishedStages: row.wishedStages,
     places: row.places - row.taken,
     taken: row.taken,
+    oneMoreIfAsked: row.oneMoreIfAsked,
   });
   return canonicalInput({
     settings,

@@ -39,6 +39,7 @@ const applicantColumns = {
   side: applications.side,
   places: applications.places,
   taken: applications.taken,
+  oneMoreIfAsked: applications.oneMoreIfAsked,
   leftOutLastTime: applications.leftOutLastTime,
   employer: profiles.employer,
   town: profiles.town,
