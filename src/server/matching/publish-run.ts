@@ -234,7 +234,7 @@ export function toldReason(shortage: number | null, { report }: Pick<FinishedRun
   if (!group) return 'This time there were more people who seek a mentor than places that suit.';
   if (group.mentors.length === 0)
     return 'This time no mentor with a free place met the rules of this cycle together with your profile.';
-  const who = group.inCommon ? `${group.mentees.length} people (${group.inCommon})` : `${group.mentees.length} people`;
+  const who = group.inCommon ? ` (${group.inCommon})` : '';
   const places = group.places === 1 ? '1 place' : `${group.places} places`;
-  return `This time ${who} could be served by mentors with ${places} in all.`;
+  return `This time ${group.mentees.length} people${who} sought one of the same mentors as you, who have ${places} in all.`;
 }

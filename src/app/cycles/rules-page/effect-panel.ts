@@ -3,7 +3,9 @@ import { FIT_BINS, type RuleEffects } from '../../../../shared/matching/effects-
 import { DistributionBars } from '../../ui/distribution-bars/distribution-bars';
 import { grouped } from '../../ui/format/plural-pipe';
 
-const BIN_POINTS = 100 / FIT_BINS;
+/** Narrow cards show half as many bars, each twice as wide. */
+const JOINED = 2;
+const BAR_FIT = (10_000 / FIT_BINS) * JOINED;
 
 /** What the settings do to the applicants as they are; the last numbers stay while new ones are computed. */
 @Component({
@@ -36,11 +38,12 @@ export class EffectPanel {
   readonly state = input.required<string>();
 
   protected readonly count = grouped;
-  protected readonly bins = computed(() =>
-    (this.effects()?.distribution ?? []).map((count, at) => ({
-      from: at * BIN_POINTS * 100,
-      to: (at + 1) * BIN_POINTS * 100,
-      count,
-    })),
-  );
+  protected readonly bins = computed(() => {
+    const counts = this.effects()?.distribution ?? [];
+    return Array.from({ length: FIT_BINS / JOINED }, (_, at) => ({
+      from: at * BAR_FIT,
+      to: (at + 1) * BAR_FIT,
+      count: counts.slice(at * JOINED, (at + 1) * JOINED).reduce((sum, each) => sum + each, 0),
+    }));
+  });
 }

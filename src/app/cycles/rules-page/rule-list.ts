@@ -23,7 +23,7 @@ const PARAMETERS: Partial<Record<RuleSetting['rule'], readonly Parameter[]>> = {
   'no-earlier-pairing': [{ key: 'cycles', label: 'In the last', unit: 'cycles' }],
   'years-apart': [
     { key: 'min', label: 'At least', unit: 'years' },
-    { key: 'max', label: 'At most (empty: no bound)', unit: 'years', optional: true },
+    { key: 'max', label: 'At most', unit: 'years', optional: true },
   ],
   meeting: [{ key: 'maxKm', label: 'In person only within', unit: 'km' }],
   'common-times': [{ key: 'slots', label: 'At least', unit: 'times' }],

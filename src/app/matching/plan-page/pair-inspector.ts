@@ -21,6 +21,16 @@ const FIRST_OPTIONS = 6;
   selector: 'app-pair-inspector',
   imports: [FitBars, FitPipe, LoadProblem, Loading, MatButton, MatFormFieldModule, MatInput, ReactiveFormsModule],
   templateUrl: './pair-inspector.html',
+  styles: `
+    .head {
+      flex-wrap: nowrap;
+      align-items: start;
+    }
+
+    .lost {
+      color: var(--madder);
+    }
+  `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class PairInspector {
