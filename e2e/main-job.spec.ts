@@ -104,7 +104,7 @@ test('the mentee accepts at home, the mentor by the link in the e-mail, and both
   await expect(mentee.page.getByText(/You have accepted\. We wait for Ruth Calloway/)).toBeVisible();
 
   const ruth = signInOf('mentor');
-  const mail = await mailTo(admin.page, ruth.email, /a mentee for you/);
+  const mail = await mailTo(admin.page, ruth.email, /a mentee for you/, 'Amara Nwosu');
   const visitor = await pageOf(browser);
   await visitor.page.goto(linkIn(mail, '/pairings/proposal/'));
   await expect(visitor.page.getByRole('heading', { name: 'A pairing for you' })).toBeVisible();

@@ -54,9 +54,9 @@ test('a forgotten password is set anew by the link, once', async ({ browser }) =
 test('a member saves a section of the profile as they type', async ({ browser }) => {
   const { page, faults } = await pageOf(browser, 'mentee');
   await page.goto('/profiles/mine');
-  await page.getByLabel('Headline').fill('Laser scanning, and what comes after it');
+  await page.getByRole('textbox', { name: 'Headline' }).fill('Laser scanning, and what comes after it');
   await expect(page.getByText(/Saved/).first()).toBeVisible();
   await page.reload();
-  await expect(page.getByLabel('Headline')).toHaveValue('Laser scanning, and what comes after it');
+  await expect(page.getByRole('textbox', { name: 'Headline' })).toHaveValue('Laser scanning, and what comes after it');
   expect(faults).toEqual([]);
 });

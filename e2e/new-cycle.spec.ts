@@ -8,7 +8,7 @@ test('a coordinator makes a cycle, imports 400 applicants and runs it', async ({
   await page.getByRole('link', { name: 'New cycle' }).click();
   await page.getByRole('button', { name: 'Make the cycle' }).click();
   await expect(page.getByText('At least 3 characters').first()).toBeVisible();
-  await page.getByLabel('Name').fill('Autumn trial');
+  await page.getByRole('textbox', { name: 'Name' }).fill('Autumn trial');
   await page.getByLabel('What applicants agree to').fill('I agree that coordinators use my profile to find a partner.');
   const dates = {
     'Applications open on': -3,

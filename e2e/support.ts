@@ -49,25 +49,26 @@ export interface Mail {
   text: string;
 }
 
-/** The newest message to an address whose subject matches, as the administrator finds it in the local mailbox. */
-export async function mailTo(admin: Page, address: string, subject: RegExp): Promise<Mail> {
-  let found: Mail | null = null;
+/** The newest message to an address that fits, as the administrator finds it in the local mailbox. */
+export async function mailTo(admin: Page, address: string, subject: RegExp, containing = ''): Promise<Mail> {
+  let found: Mail | undefined;
   await expect
-    .poll(
-      async () => {
-        const list = await admin.request.get('/api/messages', { params: { search: address } });
-        const { messages } = (await list.json()) as {
-          messages: { id: string; subject: string | null; address: string }[];
-        };
-        const line = messages.find((each) => each.address === address && subject.test(each.subject ?? ''));
-        if (!line) return false;
-        found = (await (await admin.request.get(`/api/messages/${line.id}/mailbox`)).json()) as Mail;
-        return true;
-      },
-      { timeout: 60_000, intervals: [500] },
-    )
+    .poll(async () => (found = await findMail(admin, address, subject, containing)) !== undefined, {
+      timeout: 60_000,
+      intervals: [500],
+    })
     .toBe(true);
   return found!;
+}
+
+async function findMail(admin: Page, address: string, subject: RegExp, containing: string): Promise<Mail | undefined> {
+  const list = await admin.request.get('/api/messages', { params: { search: address } });
+  const { messages } = (await list.json()) as { messages: { id: string; subject: string | null; address: string }[] };
+  for (const line of messages.filter((each) => each.address === address && subject.test(each.subject ?? ''))) {
+    const mail = (await (await admin.request.get(`/api/messages/${line.id}/mailbox`)).json()) as Mail;
+    if (mail.text.includes(containing)) return mail;
+  }
+  return undefined;
 }
 
 /** The path of the first link of a mail whose address contains the text. */
