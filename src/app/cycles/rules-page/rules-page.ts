@@ -163,6 +163,12 @@ export class RulesPage {
     this.change({ loadCharges: draft.loadCharges.map((charge, at) => (at === place ? value : charge)) });
   }
 
+  /** "1st place", "3rd place on" */
+  protected chargeLabel(place: number, last: boolean): string {
+    const ordinal = ['1st', '2nd', '3rd', '4th', '5th', '6th'][place];
+    return last ? `${ordinal} place on` : `${ordinal} place`;
+  }
+
   protected number(event: Event): number {
     return Number((event.target as HTMLInputElement).value.trim() || 'NaN');
   }
