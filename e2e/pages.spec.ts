@@ -63,11 +63,13 @@ async function cyclePages(page: Page): Promise<string[]> {
   const { runs } = (await (await page.request.get(`/api/matching/cycles/${summer.id}/runs`)).json()) as {
     runs: { id: string }[];
   };
+  const open = cycles.find((cycle) => cycle.name === 'Summer 2027')!;
   const plan = `/cycles/${summer.id}/matching/${runs[0]!.id}`;
   return [
     ...parts.map((part) => `/cycles/${winter.id}${part}`),
     ...['', '?tab=left-out', '?tab=shortages', '?tab=trade-off', '?tab=record'].map((tab) => plan + tab),
     `${plan}/review`,
+    `/cycles/${open.id}/matching/forecast`,
   ];
 }
 

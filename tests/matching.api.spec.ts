@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { DEFAULT_MATCHING_SETTINGS } from '../shared/matching/matching-contract';
-import type { RuleEffects } from '../shared/matching/effects-contract';
+import type { Forecast, RuleEffects } from '../shared/matching/effects-contract';
 import { verify } from '../shared/assignment';
 import { unpackPlan } from '../shared/matching/stored-plan';
 import type {
@@ -174,6 +174,16 @@ describe('questions about a plan', () => {
     });
     expect(refused.status).toBe(400);
     expect(refused.body.fields![0]!.message).toBe('Give at least one criterion a weight');
+  });
+});
+
+describe('the forecast', () => {
+  it('says where places would be short while applications are open', async () => {
+    const { cycleId } = await castOf('applications-closed');
+    const { body } = await coordinator.get<Forecast>(`/api/matching/cycles/${cycleId}/forecast`);
+    expect(body).toMatchObject({ mentees: 4, places: 3, pairable: 3 });
+    expect(body.shortages).toEqual([{ inCommon: 'Hydrographic', mentees: 3, mentors: 1, places: 2, short: 1 }]);
+    expect(body.areas).toContainEqual({ label: 'Hydrographic', seekers: 3, places: 2 });
   });
 });
 

@@ -34,3 +34,17 @@ export type RuleEffects = z.infer<typeof RuleEffects>;
 
 export const EffectsRequest = z.strictObject({ settings: MatchingSettings });
 export type EffectsRequest = z.input<typeof EffectsRequest>;
+
+/** What would come of the applications that are in, if they closed now. */
+export const Forecast = z.object({
+  mentees: z.int(),
+  mentors: z.int(),
+  places: z.int(),
+  pairable: z.int(),
+  shortages: z.array(
+    z.object({ inCommon: z.string(), mentees: z.int(), mentors: z.int(), places: z.int(), short: z.int() }),
+  ),
+  /** Practice areas by seekers, most first; one person can seek or offer several. */
+  areas: z.array(z.object({ label: z.string(), seekers: z.int(), places: z.int() })),
+});
+export type Forecast = z.infer<typeof Forecast>;

@@ -1,6 +1,7 @@
 import { HttpClient, httpResource } from '@angular/common/http';
 import { inject, Injectable, type Signal } from '@angular/core';
 import type { Observable } from 'rxjs';
+import { Forecast } from '../../../shared/matching/effects-contract';
 import type { MatchingSettings } from '../../../shared/matching/matching-contract';
 import {
   Alternatives,
@@ -35,6 +36,10 @@ export class MatchingClient {
 
   decisions(cycleId: Signal<string>) {
     return httpResource(() => `/api/matching/cycles/${cycleId()}/decisions`, { parse: PairDecisions.parse });
+  }
+
+  forecast(cycleId: Signal<string>) {
+    return httpResource(() => `/api/matching/cycles/${cycleId()}/forecast`, { parse: Forecast.parse });
   }
 
   plan(runId: Signal<string>) {

@@ -9,6 +9,11 @@ export const matchingRoutes: Routes = [
     loadComponent: () => import('./runs-page/runs-page').then((m) => m.RunsPage),
   },
   {
+    path: 'forecast',
+    title: 'Forecast',
+    loadComponent: () => import('./forecast-page/forecast-page').then((m) => m.ForecastPage),
+  },
+  {
     path: ':runId',
     title: 'Plan',
     loadComponent: () => import('./plan-page/plan-page').then((m) => m.PlanPage),

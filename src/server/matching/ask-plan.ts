@@ -1,5 +1,6 @@
 import type { Alternatives, DecisionPrice, PairReasons, ProofArrays } from '../../../shared/matching/runs-contract';
-import type { RuleEffects } from '../../../shared/matching/effects-contract';
+import type { Forecast, RuleEffects } from '../../../shared/matching/effects-contract';
+import type { MatchingInput } from '../../../shared/matching/matching-input';
 import type { MatchingSettings } from '../../../shared/matching/matching-contract';
 import { findCycle } from '../cycles';
 import { inTransaction, notFound, Problem, type Context } from '../platform';
@@ -58,11 +59,21 @@ export async function showProof(ctx: Context, runId: string): Promise<ProofArray
 
 /** What these settings would do to the applicants as they are now. */
 export async function showEffects(ctx: Context, cycleId: string, settings: MatchingSettings): Promise<RuleEffects> {
+  const input = zipped(await gatherNow(ctx, cycleId, settings));
+  return questionThread(ctx.settings.root).ask<'effects'>({ kind: 'effects', input });
+}
+
+/** Where places would be short if applications closed now. */
+export async function showForecast(ctx: Context, cycleId: string): Promise<Forecast> {
+  const input = zipped(await gatherNow(ctx, cycleId, null));
+  return questionThread(ctx.settings.root).ask<'forecast'>({ kind: 'forecast', input });
+}
+
+async function gatherNow(ctx: Context, cycleId: string, settings: MatchingSettings | null): Promise<MatchingInput> {
   const cycle = await findCycle(ctx.db, cycleId);
   if (!cycle) throw notFound('cycle');
-  const input = await inTransaction(ctx, async (tx) => {
+  return inTransaction(ctx, async (tx) => {
     await freeze(tx.db);
-    return gatherInput(tx.db, cycle, settings);
+    return gatherInput(tx.db, cycle, settings ?? cycle.settings);
   });
-  return questionThread(ctx.settings.root).ask<'effects'>({ kind: 'effects', input: zipped(input) });
 }

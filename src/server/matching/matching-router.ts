@@ -1,5 +1,5 @@
 import { CycleParams } from '../../../shared/cycles/cycles-contract';
-import { EffectsRequest, RuleEffects } from '../../../shared/matching/effects-contract';
+import { EffectsRequest, Forecast, RuleEffects } from '../../../shared/matching/effects-contract';
 import {
   Alternatives,
   ComparisonParams,
@@ -22,7 +22,7 @@ import {
   RunRequest,
 } from '../../../shared/matching/runs-contract';
 import { route, type Route } from '../platform';
-import { showAlternatives, showEffects, showPrice, showProof, showReasons } from './ask-plan';
+import { showAlternatives, showEffects, showForecast, showPrice, showProof, showReasons } from './ask-plan';
 import { cancelRun } from './cancel-run';
 import { comparePlans } from './compare-plans';
 import { decidePair, showDecisions } from './decide-pair';
@@ -65,6 +65,15 @@ export const matchingRoutes: Route[] = [
     body: EffectsRequest,
     answer: RuleEffects,
     handle: (ctx, { params, body }) => showEffects(ctx, params.cycleId, body.settings),
+  }),
+  route({
+    method: 'get',
+    path: '/api/matching/cycles/:cycleId/forecast',
+    may,
+    summary: 'Where places would be short if applications closed now',
+    params: CycleParams,
+    answer: Forecast,
+    handle: (ctx, { params }) => showForecast(ctx, params.cycleId),
   }),
   route({
     method: 'get',

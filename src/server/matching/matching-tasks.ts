@@ -2,7 +2,7 @@
 import type { MadePlan } from '../../../shared/matching/make-plan';
 import type { NamelessAlternatives } from '../../../shared/matching/plan-questions';
 import type { DecisionPrice, PairReasons, ProofArrays } from '../../../shared/matching/runs-contract';
-import type { RuleEffects } from '../../../shared/matching/effects-contract';
+import type { Forecast, RuleEffects } from '../../../shared/matching/effects-contract';
 
 /** A finished run: what it read and what it found, as stored. */
 export interface PlanOf {
@@ -14,6 +14,7 @@ export interface PlanOf {
 export interface Answers {
   plan: { plan: Uint8Array; report: MadePlan['report']; pairings: MadePlan['pairings'] };
   effects: RuleEffects;
+  forecast: Forecast;
   alternatives: NamelessAlternatives | null;
   reasons: PairReasons | null;
   price: DecisionPrice | null;
@@ -23,6 +24,7 @@ export interface Answers {
 export type Task =
   | { kind: 'plan'; input: Uint8Array }
   | { kind: 'effects'; input: Uint8Array }
+  | { kind: 'forecast'; input: Uint8Array }
   | { kind: 'alternatives'; of: PlanOf; mentee: string }
   | { kind: 'reasons'; of: PlanOf; mentee: string; mentor: string }
   | { kind: 'price'; of: PlanOf; mentee: string; mentor: string; decision: 'lock' | 'bar' }

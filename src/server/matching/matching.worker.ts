@@ -9,6 +9,7 @@ import {
   reasonsOf,
   type OpenPlan,
 } from '../../../shared/matching/plan-questions';
+import { forecastOf } from '../../../shared/matching/forecast';
 import { ruleEffects } from '../../../shared/matching/rule-effects';
 import { packPlan } from '../../../shared/matching/stored-plan';
 import type { PlanOf, Task, ThreadAnswer } from './matching-tasks';
@@ -37,6 +38,8 @@ function work(task: Task, progress: (share: number, stage: string) => void): unk
     }
     case 'effects':
       return ruleEffects(unzipped(task.input));
+    case 'forecast':
+      return forecastOf(unzipped(task.input));
     case 'alternatives':
       return alternativesOf(opened(task.of), task.mentee);
     case 'reasons':
