@@ -1,5 +1,5 @@
 import { httpResource } from '@angular/common/http';
-import { computed, Injectable, signal } from '@angular/core';
+import { computed, Injectable, signal, untracked } from '@angular/core';
 import { Cycle } from '../../../shared/cycles/cycles-contract';
 
 /** The cycle whose pages are open: shared by its frame and the pages inside, whichever capability they belong to. */
@@ -18,8 +18,10 @@ export class CycleStore {
     return cycle && cycle.id === this.id() ? cycle : null;
   });
 
+  /** Opening the same cycle once more asks for it anew: counts may have changed while it was left. */
   open(cycleId: string): void {
-    this.id.set(cycleId);
+    if (untracked(this.id) === cycleId) untracked(() => this.reload());
+    else this.id.set(cycleId);
   }
 
   /** After a deed that changes counts or the phase. */
