@@ -17,7 +17,7 @@ import { keepDeadlines, pairingsRoutes } from './pairings';
 import { createApi, type Api } from './platform/app';
 import type { Context, Enqueue } from './platform/context';
 import { openDatabase, type Database } from './platform/database';
-import { startJobs, type Jobs } from './platform/jobs';
+import { missingQueues, startJobs, type Jobs } from './platform/jobs';
 import { createLog } from './platform/log';
 import { missingMigrations } from './platform/migrations';
 import type { Route } from './platform/routes';
@@ -111,7 +111,8 @@ async function startWork({ boss }: Jobs, context: () => Context, settings: Setti
 
 async function notReady(database: Database, settings: Settings): Promise<string[]> {
   const missing = await missingMigrations(database.db, settings.root);
-  return missing > 0 ? [`the database lacks ${missing} of the migrations`] : [];
+  if (missing > 0) return [`the database lacks ${missing} of the migrations`];
+  return (await missingQueues(database.db)).map((queue) => `the job queue ${queue} is missing`);
 }
 
 // A new database has no association yet; the administrator names it later.

@@ -1,3 +1,4 @@
+import { EmailAddress } from '../../../shared/accounts/accounts-contract';
 import type { Actor, Context, Db } from '../platform';
 import { Problem } from '../platform';
 import type { RequestContext } from '../platform';
@@ -19,7 +20,9 @@ export async function findActor(db: Db, personId: string): Promise<Actor | null>
 
 /** The person whom an address and a password name together; takes the same time for unknown addresses. */
 export async function checkPassword(db: Db, email: string, password: string): Promise<Actor | null> {
-  const person = await findPersonByEmail(db, email);
+  // passport hands the field over as it was typed.
+  const address = EmailAddress.safeParse(email);
+  const person = address.success ? await findPersonByEmail(db, address.data) : null;
   const fits = await passwordFits(person?.passwordHash ?? null, password);
   if (!fits || !mayAct(person)) return null;
   if (person.passwordHash && needsRehash(person.passwordHash))

@@ -57,6 +57,13 @@ async function send(
   await boss.send(queue, data, { ...options, db: { executeSql } });
 }
 
+/** Queues that the database does not know; empty = jobs can be taken. */
+export async function missingQueues(db: Db): Promise<Queue[]> {
+  const { rows } = await db.execute<{ name: string }>(sql`select name from pgboss.queue`);
+  const known = new Set(rows.map((row) => row.name));
+  return QUEUES.filter((queue) => !known.has(queue));
+}
+
 /** Rebuilds a text with $1, $2 … as a Drizzle query, so that it runs in the caller's transaction. */
 function withParameters(text: string, values: unknown[]): SQL {
   const parts = text.split(/\$(\d+)/);
