@@ -38,7 +38,7 @@ describe('signing up', () => {
     });
     expect(session.body.person).toMatchObject({ name: 'Zoë Đặng', email: 'zoe@new.example', roles: [] });
     const audit = await app.rows<{ action: string }>(
-      "select action from audit_entries join people on people.id::text = subject_id where email = 'zoe@new.example' order by id",
+      "select action from audit_entries join people on people.id::text = subject_id where email = 'zoe@new.example' order by audit_entries.id",
     );
     expect(audit.map((row) => row.action)).toEqual(['accounts.register', 'accounts.confirm-address']);
   });
