@@ -2,108 +2,46 @@
  * `npm test`: every test on a throw-away PostgreSQL cluster, summed into one last line. `--only lint,types,unit,api,build,components,e2e`
  * chooses steps.
  */
-import { existsSync, mkdirSync, readFileSync, rmSync } from 'node:fs';
-import { tmpdir } from 'node:os';
+import { existsSync, readdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { ensureBrowser } from './lib/browser.mjs';
-import { freePort, throwAwayCluster } from './lib/postgres.mjs';
-import { bin, build, buildJobs, ensurePackages, randomSecret, ROOT } from './lib/project.mjs';
-import { collect, end } from './lib/run.mjs';
+import { throwAwayCluster } from './lib/cluster.mjs';
+import { check, counted, playwright, total, vitest } from './lib/counting.mjs';
+import { freePort } from './lib/ports.mjs';
+import { bin, build, buildJobs, ensureBuild, ensurePackages, randomSecret, ROOT } from './lib/project.mjs';
 import { checkNode, main, step, Stop } from './lib/say.mjs';
 import { environment, migrate, seed, startServer, untilReady } from './lib/serve.mjs';
 
-const STEPS = ['lint', 'types', 'unit', 'api', 'build', 'components', 'e2e'];
-const only = process.argv.includes('--only') ? process.argv[process.argv.indexOf('--only') + 1]?.split(',') : STEPS;
-const reports = join(tmpdir(), `heddle-reports-${process.pid}`);
-const total = { passed: 0, failed: 0 };
 let cluster = null;
-let server = null;
+let chromium = null;
 
-async function cleanUp() {
-  if (server) await end(server);
-  if (cluster) await cluster.stop();
-  rmSync(reports, { recursive: true, force: true });
-}
-for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => void cleanUp().then(() => process.exit(1)));
-
-/** Counts a command as one test. */
-async function check(label, command, args, options = {}) {
-  await counted(label, async () => {
-    const { code, output } = await collect(command, args, { cwd: ROOT, ...options });
-    return { passed: code === 0 ? 1 : 0, failed: code === 0 ? 0 : 1, output };
-  });
-}
-
-/** Runs one step and adds its counts; what it said is shown only where something failed. */
-async function counted(label, work) {
-  const since = performance.now();
-  process.stdout.write(`· ${label} … `);
-  const { passed, failed, output } = await work().catch((error) => ({
-    passed: 0,
-    failed: 1,
-    output: String(error.message),
-  }));
-  total.passed += passed;
-  total.failed += failed;
-  const seconds = ((performance.now() - since) / 1000).toFixed(1);
-  console.log(`${passed} passed, ${failed} failed, in ${seconds} s`);
-  if (failed > 0) console.log(output);
-}
-
-/** A runner that writes vitest's JSON report. A runner that ends badly without a failed test counts as one failure. */
-async function vitest(label, command, args, env = {}) {
-  const report = join(reports, `${label.replace(/\W+/g, '-')}.json`);
-  await counted(label, async () => {
-    const { code, output } = await collect(command, args(report), { cwd: ROOT, env: { ...process.env, ...env } });
-    const found = existsSync(report) ? JSON.parse(readFileSync(report, 'utf8')) : null;
-    const failed = found?.numFailedTests ?? 0;
-    return {
-      passed: found?.numPassedTests ?? 0,
-      failed: failed > 0 || code === 0 ? failed : 1,
-      output: `${output}\n${failures(found)}`,
-    };
-  });
-}
-
-function failures(report) {
-  const suites = report?.testResults ?? [];
-  return suites
-    .flatMap((suite) => [
-      ...(suite.message ? [`${suite.name}: ${suite.message}`] : []),
-      ...suite.assertionResults
-        .filter((test) => test.status === 'failed')
-        .map((test) => `${suite.name}: ${test.fullName}\n${test.failureMessages.join('\n')}`),
-    ])
-    .join('\n');
-}
+const json = (report) => ['--reporter=default', '--reporter=json', `--outputFile.json=${report}`];
 
 const STEP = {
-  async lint() {
-    await check('Lint (eslint)', bin('eslint'), ['.']);
-    await check('Format (prettier)', bin('prettier'), ['--check', '--log-level=warn', '.']);
-  },
-  async types() {
-    await check('Types of server, tests and shared code (tsc)', bin('tsc'), ['-p', 'tsconfig.node.json', '--noEmit']);
-    await check('Types of the client and its templates (ngc)', bin('ngc'), ['-p', 'tsconfig.app.json', '--noEmit']);
-  },
+  lint: () =>
+    check('Lint (eslint, prettier)', [bin('eslint'), '.'], [bin('prettier'), '--check', '--log-level=warn', '.']),
+  types: () =>
+    check(
+      'Types (tsc for server, tests and shared code; ngc for the client and its templates)',
+      [bin('tsc'), '-p', 'tsconfig.node.json', '--noEmit'],
+      [bin('ngc'), '-p', 'tsconfig.app.json', '--noEmit'],
+    ),
   unit: () =>
     vitest('Unit and property tests (vitest)', bin('vitest'), (report) => [
-      ...['run', '--project', 'unit', '--reporter=default', '--reporter=json', `--outputFile.json=${report}`],
+      'run',
+      '--project',
+      'unit',
+      ...json(report),
     ]),
-  async api() {
-    const url = await cluster.url('postgres');
-    await vitest(
+  api: async () =>
+    vitest(
       'API tests on PostgreSQL (vitest)',
       bin('vitest'),
-      (report) => ['run', '--project', 'api', '--reporter=default', '--reporter=json', `--outputFile.json=${report}`],
-      { DATABASE_URL: url },
-    );
-  },
+      (report) => ['run', '--project', 'api', ...json(report)],
+      { DATABASE_URL: await cluster.url('postgres') },
+    ),
   build: () =>
-    counted('Build', async () => {
-      await build();
-      return { passed: 1, failed: 0, output: '' };
-    }),
+    counted('Build (ng build and the jobs)', () => build().then(() => ({ passed: 1, failed: 0, output: '' }))),
   components: () =>
     vitest(
       'Component tests (ng test)',
@@ -114,10 +52,15 @@ const STEP = {
   e2e: browserTests,
 };
 
+const hasJourneys = () =>
+  existsSync(join(ROOT, 'e2e')) &&
+  readdirSync(join(ROOT, 'e2e'), { recursive: true }).some((name) => /\.spec\.ts$/.test(name));
+
 /** The built product with its demo, on a database of its own, driven in a real browser. */
 async function browserTests() {
-  const chromium = await ensureBrowser();
-  if (!existsSync(join(ROOT, 'dist/heddle/server/server.mjs'))) await step('Building', build);
+  const label = 'Browser tests (playwright)';
+  if (!hasJourneys()) return counted(label, async () => ({ passed: 0, failed: 0, output: '' }));
+  await ensureBuild();
   await buildJobs();
   const port = await freePort();
   const env = environment(await cluster.url('heddle_e2e'), {
@@ -126,41 +69,43 @@ async function browserTests() {
     SESSION_SECRET: randomSecret(),
     DEMO: '1',
     LOG_LEVEL: 'error',
+    // What a developer has set for a server of their own must not reach this one: least of all a real mail server.
+    ...Object.fromEntries(['HOST', 'SMTP_URL', 'HEDDLE_PROCESS', 'TRUST_PROXY'].map((name) => [name, ''])),
   });
   await migrate(env);
   await seed(env);
-  server = startServer(env);
-  await step('Starting the product for the browser', () => untilReady(port, server));
-  const report = join(reports, 'e2e.json');
-  await counted('Browser tests (playwright)', async () => {
-    const { code, output } = await collect(bin('playwright'), ['test', '--reporter=list,json'], {
-      cwd: ROOT,
-      env: {
-        ...process.env,
-        BASE_URL: `http://localhost:${port}`,
-        CHROMIUM: chromium,
-        PLAYWRIGHT_JSON_OUTPUT_NAME: report,
-      },
-    });
-    const stats = existsSync(report) ? JSON.parse(readFileSync(report, 'utf8')).stats : null;
-    const failed = (stats?.unexpected ?? 0) + (stats?.flaky ?? 0);
-    return { passed: stats?.expected ?? 0, failed: failed > 0 || code === 0 ? failed : 1, output };
+  const server = startServer(env);
+  await step('Starting the product for the browser', () => untilReady(server));
+  const failedBefore = total.failed;
+  await playwright(label, bin('playwright'), ['test', '--reporter=list,json'], {
+    BASE_URL: `http://localhost:${port}`,
+    CHROMIUM: chromium,
   });
-  await end(server);
-  server = null;
+  if (total.failed > failedBefore) console.log(`The server’s last lines:\n${server.lastLines()}`);
 }
 
-await main(async () => {
-  checkNode();
-  const unknown = only.filter((name) => !STEPS.includes(name));
-  if (unknown.length > 0) throw new Stop(`There is no step "${unknown[0]}". Steps: ${STEPS.join(', ')}.`);
-  mkdirSync(reports, { recursive: true });
-  await ensurePackages();
-  if (only.some((name) => name === 'api' || name === 'e2e'))
-    cluster = await step('Starting a throw-away PostgreSQL cluster', throwAwayCluster);
-  for (const name of STEPS) if (only.includes(name)) await STEP[name]();
-});
-await cleanUp();
-if (process.exitCode) total.failed++;
-console.log(`\n${total.passed} passed, ${total.failed} failed`);
-process.exit(total.failed === 0 ? 0 : 1);
+function chosenSteps() {
+  const at = process.argv.indexOf('--only');
+  const all = Object.keys(STEP);
+  const names = at < 0 ? all : (process.argv[at + 1] ?? '').split(',');
+  const unknown = names.find((name) => !all.includes(name));
+  if (unknown !== undefined) throw new Stop(`There is no step "${unknown}". Steps: ${all.join(', ')}.`);
+  return all.filter((name) => names.includes(name));
+}
+
+await main(
+  async () => {
+    const steps = chosenSteps();
+    await step(`Node.js ${process.versions.node}`, checkNode);
+    await ensurePackages();
+    if (steps.includes('e2e')) chromium = await ensureBrowser();
+    if (steps.includes('api') || steps.includes('e2e')) cluster = await throwAwayCluster();
+    for (const name of steps) await STEP[name]();
+  },
+  () => {
+    // Whatever ended the run before its time has failed too.
+    if (process.exitCode) total.failed++;
+    console.log(`\n${total.passed} passed, ${total.failed} failed`);
+    if (total.failed > 0) process.exitCode ??= 1;
+  },
+);

@@ -1,9 +1,9 @@
 /** The project's folder, its packages and its build. */
 import { createHash, randomBytes } from 'node:crypto';
-import { existsSync, mkdirSync, readdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
-import { must } from './run.mjs';
+import { must } from './must.mjs';
 import { step } from './say.mjs';
 
 export const ROOT = dirname(dirname(dirname(fileURLToPath(import.meta.url))));
@@ -11,17 +11,16 @@ export const ROOT = dirname(dirname(dirname(fileURLToPath(import.meta.url))));
 export const DATA = join(ROOT, '.data');
 export const bin = (name) => join(ROOT, 'node_modules/.bin', name);
 
-/** A file that is written once and read ever after; only its owner may read it. */
-export function kept(name, make) {
-  const path = join(DATA, name);
+export const randomSecret = () => randomBytes(32).toString('hex');
+
+/** A secret that is made once and read ever after; only its owner may read its file. */
+export function keptSecret(path) {
   if (existsSync(path)) return readFileSync(path, 'utf8').trim();
-  mkdirSync(DATA, { recursive: true });
-  const value = make();
+  mkdirSync(dirname(path), { recursive: true });
+  const value = randomSecret();
   writeFileSync(path, `${value}\n`, { mode: 0o600 });
   return value;
 }
-
-export const randomSecret = () => randomBytes(32).toString('hex');
 
 const hashOf = (paths) => {
   const hash = createHash('sha256');
@@ -35,12 +34,12 @@ const isCurrent = (marker, hash) => existsSync(marker) && readFileSync(marker, '
 export async function ensurePackages() {
   const marker = join(ROOT, 'node_modules/.heddle-lock');
   const hash = hashOf(['package-lock.json']);
-  if (isCurrent(marker, hash)) return;
-  await step('Installing packages (npm ci)', async () => {
+  if (isCurrent(marker, hash)) return step('Packages', () => 'as in package-lock.json');
+  await step('Installing packages (npm ci, a minute or two)', async () => {
     await must(
       'The packages could not be installed. Check that the npm registry can be reached, then run this again.',
-      process.platform === 'win32' ? 'npm.cmd' : 'npm',
-      ['ci', '--no-audit', '--no-fund', '--loglevel=error'],
+      'npm',
+      ['ci', '--include=dev', '--no-audit', '--no-fund', '--no-update-notifier', '--loglevel=error'],
       { cwd: ROOT },
     );
     writeFileSync(marker, hash);
@@ -60,22 +59,25 @@ function sources() {
   return [...folders, ...files, 'scripts/build-server.mjs'].sort();
 }
 
+const BUILT = join(ROOT, 'dist/.heddle-sources');
+
 /** Builds where sources have changed since the last build. */
 export async function ensureBuild() {
-  const marker = join(ROOT, 'dist/.heddle-sources');
-  const hash = hashOf(sources());
-  if (isCurrent(marker, hash)) return;
-  await step('Building (the first time takes a minute or two)', build);
-  writeFileSync(marker, hash);
+  if (isCurrent(BUILT, hashOf(sources()))) return step('Build', () => 'of these sources');
+  await step('Building (ng build and the jobs, a minute or so)', build);
 }
 
+/** Builds, and notes of which sources, so that the next start need not. */
 export async function build() {
+  const hash = hashOf(sources());
+  rmSync(BUILT, { force: true });
   const options = { cwd: ROOT, env: { ...process.env, NG_CLI_ANALYTICS: 'false', CI: '1' } };
   await must('The application could not be built; the compiler says:', bin('ng'), ['build'], options);
   await buildJobs();
+  writeFileSync(BUILT, hash);
 }
 
-export const buildJobs = () =>
-  must('The background jobs could not be built; the compiler says:', process.execPath, ['scripts/build-server.mjs'], {
-    cwd: ROOT,
-  });
+export async function buildJobs() {
+  const sentence = 'The background jobs could not be built; the compiler says:';
+  await must(sentence, process.execPath, [join(ROOT, 'scripts/build-server.mjs')], { cwd: ROOT });
+}
