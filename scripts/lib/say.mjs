@@ -57,7 +57,7 @@ function sentenceOf(error) {
   if (error instanceof Interrupted) return '\nStopped.';
   if (error instanceof Stop) return `\n${error.message}`;
   if (error.code === 'EACCES' || error.code === 'EPERM')
-    return `\n${error.path ?? 'A file of the project'} belongs to another user, perhaps from a start as root. Start as that user, or hand the project’s folder over with chown.`;
+    return `\n${error.path ?? 'A file of the project'} cannot be written: it or its folder belongs to another user, perhaps from a start as root. Start as that user, or hand the project’s folder over with chown.`;
   if (error.code === 'ENOSPC') return '\nThe disk is full. Free some space, then run this again.';
   return error;
 }
