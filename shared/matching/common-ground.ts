@@ -4,6 +4,8 @@ import type { Judge } from './build-problem';
 
 /** A trait is named where at least this share of the group has it … */
 const SHARE_IN_GROUP = 0.6;
+/** Two regions are named together where this share lives in them. */
+const SHARE_OF_TWO = 0.8;
 /** … and it is at least this much more frequent than among all mentees. */
 const LIFT = 1.2;
 
@@ -36,10 +38,23 @@ export function commonGround(judge: Judge, mentees: readonly number[]): string {
     .filter((tag) => stands(tag.mentees.length / mentees.length, usual.get(tag.label) ?? 0))
     .slice(0, 2)
     .map((tag) => tag.label);
-  const regions = Object.keys(REGION_LABEL).filter((region) => {
-    const share = (group: readonly number[]): number =>
-      group.filter((i) => regionOf(judge, i) === region).length / group.length;
-    return stands(share(mentees), share(all));
-  });
-  return [...tags, ...regions.map((region) => REGION_LABEL[region as Region])].join(' · ');
+  return [...tags, regionsInCommon(judge, mentees, all)].filter(Boolean).join(' · ');
+}
+
+/** The region in which most live, or the two in which nearly all do: "Islands", "Coast and Islands"; empty where none stands out. */
+function regionsInCommon(judge: Judge, mentees: readonly number[], all: readonly number[]): string {
+  const share = (group: readonly number[], regions: readonly string[]): number =>
+    group.filter((i) => regions.includes(regionOf(judge, i) ?? '')).length / group.length;
+  const byShare = Object.keys(REGION_LABEL).sort((a, b) => share(mentees, [b]) - share(mentees, [a]));
+  const standOut = (regions: readonly string[], least: number): boolean =>
+    share(mentees, regions) >= least && share(mentees, regions) >= LIFT * share(all, regions);
+  const found = standOut(byShare.slice(0, 1), SHARE_IN_GROUP)
+    ? byShare.slice(0, 1)
+    : standOut(byShare.slice(0, 2), SHARE_OF_TWO)
+      ? byShare.slice(0, 2)
+      : [];
+  return found
+    .map((region) => REGION_LABEL[region as Region])
+    .sort()
+    .join(' and ');
 }
