@@ -4,10 +4,10 @@ import type { Judge } from './build-problem';
 
 /** A trait is named where at least this share of the group has it … */
 const SHARE_IN_GROUP = 0.6;
-/** Two regions are named together where this share lives in them. */
-const SHARE_OF_TWO = 0.8;
 /** … and it is at least this much more frequent than among all mentees. */
 const LIFT = 1.2;
+/** Two regions are named together where this share lives in them. */
+const SHARE_OF_TWO = 0.8;
 
 /** Practice areas by how many of these mentees seek them, most first. */
 export function tagsSought(judge: Judge, mentees: readonly number[]): { label: string; mentees: number[] }[] {
