@@ -1,17 +1,8 @@
 /** Pure decisions about a cycle's phases, made alike by server and pages. */
-import type { CheckItem, CycleCounts, CycleDates, CyclePhase } from './cycles-contract';
+import { CYCLE_PHASES, type CheckItem, type CycleCounts, type CycleDates, type CyclePhase } from './cycles-contract';
 
 /** The order of a cycle's life; `cancelled` stands outside it. */
-const ORDER: readonly CyclePhase[] = [
-  'draft',
-  'open',
-  'applications-closed',
-  'matching',
-  'responses',
-  'under-way',
-  'closing',
-  'closed',
-];
+const ORDER: readonly CyclePhase[] = CYCLE_PHASES.filter((phase) => phase !== 'cancelled');
 
 /** The phase that follows; null at the end. */
 export function nextPhase(phase: CyclePhase): CyclePhase | null {
