@@ -291,4 +291,32 @@ describe('publishing', () => {
     expect((await publish({ acknowledgedChanges: true }, review.version + 1)).status).toBe(412);
     expect((await publish({ acknowledgedChanges: true }, review.version)).status).toBe(200);
   });
+
+  it('waits for a second coordinator where the cycle asks for one', async () => {
+    const { cycleId } = await castOf();
+    await app.rows('update cycles set needs_approval = true where id = $1', [cycleId]);
+    const run = await finished(cycleId);
+    const { body: review } = await coordinator.get<PublishReview>(`/api/matching/runs/${run.id}/review`);
+    expect(review.refusal).toContain('second coordinator');
+    const publish = () =>
+      coordinator.post<ProblemDetails>(
+        `/api/matching/runs/${run.id}/publish`,
+        {},
+        { 'if-match': `"${review.version}"` },
+      );
+    expect((await publish()).status).toBe(409);
+    const own = await coordinator.post<ProblemDetails>(`/api/matching/runs/${run.id}/approve`, {});
+    expect(own.body.title).toBe('You started this run; another coordinator approves its plan');
+    const second = await app.client('coordinator');
+    expect((await second.post<PublishReview>(`/api/matching/runs/${run.id}/approve`, {})).body.approval.by).toBe(
+      'Test Person',
+    );
+    const bySecond = await second.post<ProblemDetails>(
+      `/api/matching/runs/${run.id}/publish`,
+      {},
+      { 'if-match': `"${review.version}"` },
+    );
+    expect(bySecond.body.title).toBe('You approved this plan; another coordinator publishes it');
+    expect((await publish()).status).toBe(200);
+  });
 });

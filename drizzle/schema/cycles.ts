@@ -35,6 +35,8 @@ export const cycles = pgTable(
     consentVersion: integer().notNull().default(1),
     askFirst: text().$type<AskFirst>().notNull().default('both'),
     autoAdmit: boolean().notNull().default(true),
+    /** A second coordinator looks at a plan before it is published. */
+    needsApproval: boolean().notNull().default(false),
     settings: jsonb().$type<MatchingSettings>().notNull(),
     settingsVersion: integer().notNull().default(1),
     createdBy: uuid().references(() => people.id, { onDelete: 'set null' }),

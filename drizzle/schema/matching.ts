@@ -117,6 +117,17 @@ export const pairDecisions = pgTable(
   ],
 );
 
+/** One row per plan that a second coordinator approved for publishing. */
+export const planApprovals = pgTable('plan_approvals', {
+  runId: uuid()
+    .primaryKey()
+    .references(() => runs.id, { onDelete: 'cascade' }),
+  approvedBy: uuid()
+    .notNull()
+    .references(() => people.id, { onDelete: 'cascade' }),
+  approvedAt: instant().notNull(),
+});
+
 /** One row per published run: the set of proposals, numbered within the cycle and frozen. */
 export const rounds = pgTable(
   'rounds',

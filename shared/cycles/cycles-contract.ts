@@ -63,6 +63,8 @@ const cycleFields = CycleDates.extend({
   askFirst: AskFirst,
   /** Complete applications sent before the deadline are admitted without a coordinator's decision. */
   autoAdmit: z.boolean(),
+  /** A second coordinator approves a plan before it is published. */
+  needsApproval: z.boolean().default(false),
 });
 
 function checkDates(cycle: CycleDates, check: z.RefinementCtx): void {
@@ -80,10 +82,12 @@ export const NewCycle = z
 export type NewCycle = z.input<typeof NewCycle>;
 
 /** What anybody may know of a cycle. */
-export const CycleSummary = cycleFields.omit({ autoAdmit: true, consentText: true, askFirst: true }).extend({
-  id: z.uuid(),
-  phase: CyclePhase,
-});
+export const CycleSummary = cycleFields
+  .omit({ autoAdmit: true, needsApproval: true, consentText: true, askFirst: true })
+  .extend({
+    id: z.uuid(),
+    phase: CyclePhase,
+  });
 export type CycleSummary = z.infer<typeof CycleSummary>;
 /** What an applicant reads before applying. */
 export const CycleToApply = CycleSummary.extend({ consentText: z.string(), consentVersion: z.int() });

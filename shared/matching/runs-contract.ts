@@ -239,6 +239,8 @@ export const PublishReview = z.object({
   answersDueAt: z.iso.datetime(),
   changedSince: z.array(z.object({ text: z.string(), blocks: z.boolean() })),
   refusal: z.string().nullable(),
+  /** Where the cycle asks for a second coordinator: who approved, and whether the reader may. */
+  approval: z.object({ needed: z.boolean(), by: z.string().nullable(), mayApprove: z.boolean() }),
   version: z.int(),
 });
 export type PublishReview = z.infer<typeof PublishReview>;

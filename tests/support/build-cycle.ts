@@ -16,6 +16,7 @@ export const cycleDraft = (change: Partial<CycleDraft> = {}): CycleDraft => ({
   consentText: 'I agree that the coordinators use my profile to find me a partner.',
   askFirst: 'both',
   autoAdmit: true,
+  needsApproval: false,
   applicationsOpenOn: dayFrom(-30),
   applicationsCloseOn: dayFrom(5),
   answersDueOn: dayFrom(14),

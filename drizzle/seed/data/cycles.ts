@@ -13,7 +13,7 @@ import { type Chance, chance } from './random';
 /** The day on which the demo was written; the seed gives the real one. */
 export const DEMO_TODAY = '2026-12-01';
 
-type Dates = Omit<CycleDraft, 'name' | 'introduction' | 'consentText' | 'askFirst' | 'autoAdmit'>;
+type Dates = Omit<CycleDraft, 'name' | 'introduction' | 'consentText' | 'askFirst' | 'autoAdmit' | 'needsApproval'>;
 
 function draft(name: string, key: PartKey, dates: Dates): CycleDraft {
   return {
@@ -22,6 +22,7 @@ function draft(name: string, key: PartKey, dates: Dates): CycleDraft {
     consentText: CONSENT_TEXT,
     askFirst: 'both',
     autoAdmit: true,
+    needsApproval: false,
     ...dates,
   };
 }

@@ -105,6 +105,10 @@ export class MatchingClient {
     return this.http.get<ProofArrays>(`/api/matching/runs/${runId}/proof`);
   }
 
+  approve(runId: string): Observable<PublishReview> {
+    return this.http.post<PublishReview>(`/api/matching/runs/${runId}/approve`, {});
+  }
+
   publish(runId: string, version: number, acknowledgedChanges: boolean): Observable<PublishOutcome> {
     return this.http.post<PublishOutcome>(
       `/api/matching/runs/${runId}/publish`,

@@ -45,6 +45,7 @@ export async function showCycle(ctx: Context, cycleId: string): Promise<Cycle> {
     consentVersion: row.consentVersion,
     askFirst: row.askFirst,
     autoAdmit: row.autoAdmit,
+    needsApproval: row.needsApproval,
     version: row.version,
     settingsVersion: row.settingsVersion,
     counts,

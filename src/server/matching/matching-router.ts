@@ -22,6 +22,7 @@ import {
   RunRequest,
 } from '../../../shared/matching/runs-contract';
 import { route, type Route } from '../platform';
+import { approvePlan } from './approve-plan';
 import { showAlternatives, showEffects, showForecast, showPrice, showProof, showReasons } from './ask-plan';
 import { cancelRun } from './cancel-run';
 import { comparePlans } from './compare-plans';
@@ -183,6 +184,15 @@ export const matchingRoutes: Route[] = [
     params: RunParams,
     answer: PublishReview,
     handle: (ctx, { params }) => reviewPublish(ctx, params.runId),
+  }),
+  route({
+    method: 'post',
+    path: '/api/matching/runs/:runId/approve',
+    may,
+    summary: 'Approve a plan for publishing, as a second coordinator',
+    params: RunParams,
+    answer: PublishReview,
+    handle: (ctx, { params }) => approvePlan(ctx, params.runId),
   }),
   route({
     method: 'post',

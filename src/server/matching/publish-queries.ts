@@ -1,5 +1,5 @@
 import { and, eq, inArray, max } from 'drizzle-orm';
-import { applications, pairings, people, rounds } from '../../../drizzle/schema';
+import { applications, pairings, people, planApprovals, rounds } from '../../../drizzle/schema';
 import type { Db } from '../platform';
 
 export async function nextRoundNumber(db: Db, cycleId: string): Promise<number> {
@@ -18,6 +18,19 @@ export async function findRoundOfRun(db: Db, runId: string): Promise<{ id: strin
 export async function insertRound(db: Db, row: typeof rounds.$inferInsert): Promise<string> {
   const [inserted] = await db.insert(rounds).values(row).returning({ id: rounds.id });
   return inserted!.id;
+}
+
+export async function findApproval(db: Db, runId: string): Promise<{ personId: string; name: string } | null> {
+  const [row] = await db
+    .select({ personId: people.id, name: people.name })
+    .from(planApprovals)
+    .innerJoin(people, eq(people.id, planApprovals.approvedBy))
+    .where(eq(planApprovals.runId, runId));
+  return row ?? null;
+}
+
+export async function insertApproval(db: Db, row: typeof planApprovals.$inferInsert): Promise<void> {
+  await db.insert(planApprovals).values(row).onConflictDoNothing();
 }
 
 export type NewPairing = typeof pairings.$inferInsert;

@@ -25,6 +25,7 @@ import { answersDue, dueInWords } from './deadlines';
 import { messagePerson, proposalMessage, PROPOSAL_PURPOSE, type MessagePerson } from './proposal-messages';
 import {
   countProposals,
+  findApproval,
   findRoundOfRun,
   insertPairings,
   insertRound,
@@ -111,6 +112,7 @@ async function assertPublishable(
 ): Promise<void> {
   if (!(PUBLISHING_PHASES as readonly string[]).includes(cycle.phase))
     throw new Problem('conflict', 'Plans are published while the cycle is in matching, or later for a repair round');
+  await assertApproved(tx, cycle, listed.run.id);
   const facts = new Map((await listApplicants(tx.db, cycle.id)).map((each) => [each.applicationId, each]));
   const changes = await changedSince(tx, { cycle, input, facts, settings: listed.run.settings });
   const blocking = changes.filter((change) => change.blocks);
@@ -122,6 +124,15 @@ async function assertPublishable(
     throw new Problem('conflict', 'Things have changed since this run', {
       detail: `${changes.map((change) => change.text).join('. ')}. Acknowledge the differences, or run again.`,
     });
+}
+
+/** Whoever publishes cannot be the one who approved. */
+async function assertApproved(tx: Context, cycle: CycleRow, runId: string): Promise<void> {
+  if (!cycle.needsApproval) return;
+  const approval = await findApproval(tx.db, runId);
+  if (!approval) throw new Problem('conflict', 'A second coordinator has to approve this plan before it is published');
+  if (approval.personId === actorOf(tx).personId)
+    throw new Problem('conflict', 'You approved this plan; another coordinator publishes it');
 }
 
 interface Publishing {

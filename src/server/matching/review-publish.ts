@@ -1,11 +1,11 @@
 import type { PublishReview } from '../../../shared/matching/runs-contract';
 import { findAssociation } from '../accounts';
 import { findCycle } from '../cycles';
-import { notFound, type Context } from '../platform';
+import { actorOf, notFound, type Context } from '../platform';
 import { changedSince } from './changed-since';
 import { listApplicants } from './cycle-facts-queries';
 import { answersDue } from './deadlines';
-import { nextRoundNumber } from './publish-queries';
+import { findApproval, nextRoundNumber } from './publish-queries';
 import { toldReason } from './publish-run';
 import { toRunLine } from './run-lines';
 import { listPlanPairings } from './runs-queries';
@@ -20,6 +20,7 @@ export async function reviewPublish(ctx: Context, runId: string): Promise<Publis
   if (!cycle || !association) throw notFound('cycle');
   const facts = new Map((await listApplicants(ctx.db, cycle.id)).map((each) => [each.applicationId, each]));
   const nameOf = (key: string): string => facts.get(key)?.name ?? 'Erased';
+  const approval = await findApproval(ctx.db, runId);
   const pairings = await listPlanPairings(ctx.db, runId);
   const changes =
     listed.round === null ? await changedSince(ctx, { cycle, input, facts, settings: listed.run.settings }) : [];
@@ -43,9 +44,22 @@ export async function reviewPublish(ctx: Context, runId: string): Promise<Publis
     })),
     answersDueAt: answersDue(cycle.answersDueOn, association.timeZone, ctx.now()).toISOString(),
     changedSince: changes,
-    refusal: refusalOf(listed.round, cycle.phase, changes),
+    refusal:
+      refusalOf(listed.round, cycle.phase, changes) ??
+      approvalRefusal(cycle.needsApproval, approval, actorOf(ctx).personId),
+    approval: {
+      needed: cycle.needsApproval,
+      by: approval?.name ?? null,
+      mayApprove: cycle.needsApproval && !approval && listed.run.requestedBy !== actorOf(ctx).personId,
+    },
     version: cycle.version,
   };
+}
+
+function approvalRefusal(needed: boolean, approval: { personId: string } | null, reader: string): string | null {
+  if (!needed) return null;
+  if (!approval) return 'A second coordinator has to approve this plan before it is published.';
+  return approval.personId === reader ? 'You approved this plan; another coordinator publishes it.' : null;
 }
 
 function refusalOf(round: number | null, phase: string, changes: PublishReview['changedSince']): string | null {

@@ -63,9 +63,8 @@ export async function renderMessage(
   const plain = (value: string): string => Mustache.render(value, view, {}, { escape: String });
   return {
     // A line break in a name must not start a new header.
-    // eslint-disable-next-line no-control-regex
     subject: plain(subject)
-      .replace(/[\u0000-\u001f\u007f\u0085\u2028\u2029]+/g, ' ')
+      .replace(/[\p{Cc}\u2028\u2029]+/gu, ' ')
       .trim(),
     html: Mustache.render(html, view),
     text:

@@ -44,6 +44,7 @@ export class CycleForm {
     consentText: ['', asContract(CycleDraft.shape.consentText)],
     askFirst: 'both' as AskFirst,
     autoAdmit: true,
+    needsApproval: false,
     applicationsOpenOn: ['', asContract(CycleDraft.shape.applicationsOpenOn)],
     applicationsCloseOn: ['', asContract(CycleDraft.shape.applicationsCloseOn)],
     answersDueOn: ['', asContract(CycleDraft.shape.answersDueOn)],

@@ -17,6 +17,7 @@ const FIELD_LABEL: Record<keyof CycleDraft, string> = {
   consentText: 'What applicants agree to',
   askFirst: 'Who is asked first',
   autoAdmit: 'Admission without a decision',
+  needsApproval: 'Approval by a second coordinator',
   applicationsOpenOn: 'Applications open',
   applicationsCloseOn: 'Applications close',
   answersDueOn: 'Answers due',

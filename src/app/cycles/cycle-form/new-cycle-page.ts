@@ -49,7 +49,7 @@ export class NewCyclePage {
   /** Texts and ways of the earlier cycle; name and dates are new. */
   protected readonly start = computed((): CycleDraft | null => {
     if (this.copyFrom() === null || !this.source.hasValue()) return null;
-    const { introduction, consentText, askFirst, autoAdmit } = this.source.value();
+    const { introduction, consentText, askFirst, autoAdmit, needsApproval } = this.source.value();
     const none = {
       applicationsOpenOn: '',
       applicationsCloseOn: '',
@@ -58,7 +58,7 @@ export class NewCyclePage {
       checkInOn: '',
       endsOn: '',
     };
-    return { name: '', introduction, consentText, askFirst, autoAdmit, ...none };
+    return { name: '', introduction, consentText, askFirst, autoAdmit, needsApproval, ...none };
   });
   protected readonly busy = signal(false);
   protected readonly refused = signal<{ title: string; fields: readonly FieldFault[] } | null>(null);

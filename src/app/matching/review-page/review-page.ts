@@ -55,6 +55,20 @@ export class ReviewPage {
     return `Round ${review.round}: ${counted(review.proposals, 'proposal', 'proposals')}, ${counted(review.messages, 'message', 'messages')}`;
   });
 
+  protected approve(): void {
+    this.refusal.set('');
+    this.client.approve(this.runId()).subscribe({
+      next: (review) => {
+        this.resource.set(review);
+        this.notices.say('Approved. Another coordinator can publish this plan now.');
+      },
+      error: (error: unknown) => {
+        const problem = problemOf(error);
+        this.refusal.set([problem.title, problem.detail].filter(Boolean).join('. '));
+      },
+    });
+  }
+
   protected publish(): void {
     const review = this.review();
     if (!review) return;
