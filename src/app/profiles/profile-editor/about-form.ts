@@ -13,7 +13,7 @@ import {
 } from '../../../../shared/profiles/profiles-contract';
 import { faultOf } from '../../core/form-faults';
 import { SessionStore } from '../../core/session-store';
-import { LANGUAGES, LEVELS, REGIONS, TIME_ZONES } from './choices';
+import { LANGUAGES, LEVELS, LIKELY_LANGUAGES, REGIONS, TIME_ZONES } from './choices';
 import { SectionCard } from './section-card';
 import { SectionSaver } from './section-saver';
 
@@ -73,8 +73,8 @@ export class AboutForm {
 
   protected addLanguage(): void {
     const used = new Set(this.languageForms.getRawValue().map((skill) => skill.code));
-    const next = LANGUAGES.find((language) => !used.has(language.key));
-    if (next) this.languageForms.push(this.languageForm({ code: next.key, level: 'B2' }));
+    const next = [...LIKELY_LANGUAGES, ...LANGUAGES.map((language) => language.key)].find((code) => !used.has(code));
+    if (next) this.languageForms.push(this.languageForm({ code: next, level: 'B2' }));
   }
 
   protected removeLanguage(index: number): void {

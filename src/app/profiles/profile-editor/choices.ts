@@ -14,11 +14,17 @@ import {
   SectorWish,
 } from '../../../../shared/profiles/profiles-contract';
 
-// ISO 639-1 codes of languages that people of a European association are likely to meet in; their names come from Intl.
-const LANGUAGE_CODES =
-  'ar bg bs ca cs cy da de el en es et eu fa fi fr ga gl hi hr hu hy is it ja ka ko lb lt lv mk mt nb nl nn pl pt ro ru sk sl sq sr sv tr uk ur vi zh'.split(
-    ' ',
-  );
+// ISO 639-1 codes, all of living languages that Intl can name (typed from memory of the standard); their names come from Intl.
+const LANGUAGE_CODES = (
+  'aa ab af ak am an ar as av ay az ba be bg bm bn bo br bs ca ce ch co cs cv cy da de dv dz ee el en eo es et eu fa ff fi fj ' +
+  'fo fr fy ga gd gl gn gu gv ha he hi hr ht hu hy hz id ig ik is it iu ja jv ka kg ki kj kk kl km kn ko kr ks ku kv kw ky lb ' +
+  'lg li ln lo lt lu lv mg mh mi mk ml mn mr ms mt my na nb nd ne ng nl nn no nr nv ny oc oj om or os pa pl ps pt qu rm rn ro ' +
+  'ru rw sc sd se sg si sk sl sm sn so sq sr ss st su sv sw ta te tg th ti tk tl tn to tr ts tt ty ug uk ur uz ve vi wa wo xh ' +
+  'yi yo za zh zu'
+).split(' ');
+
+/** Offered first when somebody adds a language. */
+export const LIKELY_LANGUAGES: readonly string[] = ['en', 'da', 'de', 'fr', 'es'];
 
 const names = new Intl.DisplayNames('en', { type: 'language' });
 
