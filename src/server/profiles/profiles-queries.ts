@@ -22,29 +22,32 @@ export async function insertProfile(db: Db, personId: string, timeZone: string, 
 export async function loadProfileRows(db: Db, personIds: string[]): Promise<ProfileRows[]> {
   if (personIds.length === 0) return [];
   const other = alias(people, 'other');
-  const [heads, tags, exclusions, interests] = await Promise.all([
-    db
-      .select({ profile: profiles, name: people.name })
-      .from(profiles)
-      .innerJoin(people, eq(people.id, profiles.personId))
-      .where(inArray(profiles.personId, personIds)),
-    db.select().from(profileTags).where(inArray(profileTags.personId, personIds)).orderBy(asc(profileTags.priority)),
-    db
-      .select({ personId: profileExclusions.personId, otherId: profileExclusions.otherId, name: other.name })
-      .from(profileExclusions)
-      .innerJoin(other, eq(other.id, profileExclusions.otherId))
-      .where(inArray(profileExclusions.personId, personIds)),
-    db
-      .select({
-        personId: declaredInterests.personId,
-        otherId: declaredInterests.otherId,
-        name: other.name,
-        kind: declaredInterests.kind,
-      })
-      .from(declaredInterests)
-      .innerJoin(other, eq(other.id, declaredInterests.otherId))
-      .where(inArray(declaredInterests.personId, personIds)),
-  ]);
+  // One after the other: inside a transaction there is one connection.
+  const heads = await db
+    .select({ profile: profiles, name: people.name })
+    .from(profiles)
+    .innerJoin(people, eq(people.id, profiles.personId))
+    .where(inArray(profiles.personId, personIds));
+  const tags = await db
+    .select()
+    .from(profileTags)
+    .where(inArray(profileTags.personId, personIds))
+    .orderBy(asc(profileTags.priority));
+  const exclusions = await db
+    .select({ personId: profileExclusions.personId, otherId: profileExclusions.otherId, name: other.name })
+    .from(profileExclusions)
+    .innerJoin(other, eq(other.id, profileExclusions.otherId))
+    .where(inArray(profileExclusions.personId, personIds));
+  const interests = await db
+    .select({
+      personId: declaredInterests.personId,
+      otherId: declaredInterests.otherId,
+      name: other.name,
+      kind: declaredInterests.kind,
+    })
+    .from(declaredInterests)
+    .innerJoin(other, eq(other.id, declaredInterests.otherId))
+    .where(inArray(declaredInterests.personId, personIds));
   const tagsOf = grouped(tags, (row) => row.personId);
   const exclusionsOf = grouped(exclusions, (row) => row.personId);
   const interestsOf = grouped(interests, (row) => row.personId);
