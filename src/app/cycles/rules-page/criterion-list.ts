@@ -1,9 +1,9 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import { MatFormFieldModule } from '@angular/material/form-field';
-import { MatInput } from '@angular/material/input';
 import { MatSliderModule } from '@angular/material/slider';
-import { CRITERIA } from '../../../../shared/matching/catalogue';
+import { activeCriteria, CRITERIA } from '../../../../shared/matching/catalogue';
 import type { CriterionSetting } from '../../../../shared/matching/matching-contract';
+import { shareInWords } from '../../ui/format/share-pipe';
+import { NumberField } from './number-field';
 
 const PARAMETERS: Partial<
   Record<CriterionSetting['criterion'], readonly { key: string; label: string; unit: string }[]>
@@ -18,7 +18,7 @@ const PARAMETERS: Partial<
 /** The criteria: a weight each, shown as the share of the whole. */
 @Component({
   selector: 'app-criterion-list',
-  imports: [MatFormFieldModule, MatInput, MatSliderModule],
+  imports: [MatSliderModule, NumberField],
   templateUrl: './criterion-list.html',
   styleUrl: './rules-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -29,27 +29,29 @@ export class CriterionList {
   readonly locked = input(false);
   readonly changed = output<CriterionSetting>();
 
-  protected readonly total = computed(() => this.criteria().reduce((sum, each) => sum + (each.weight || 0), 0));
-  protected readonly entries = computed(() =>
-    this.criteria().map((criterion, at) => ({
-      criterion,
-      words: CRITERIA[criterion.criterion],
-      share: this.total() > 0 ? Math.round((100 * criterion.weight) / this.total()) : 0,
-      fault: this.faults().get(`criteria.${at}.weight`) ?? '',
-      fields: (PARAMETERS[criterion.criterion] ?? []).map((parameter) => ({
-        ...parameter,
-        value: String((criterion as unknown as Record<string, number>)[parameter.key] ?? ''),
-        fault: this.faults().get(`criteria.${at}.${parameter.key}`) ?? '',
-      })),
-    })),
-  );
+  protected readonly entries = computed(() => {
+    const active = activeCriteria(this.criteria());
+    return this.criteria().map((criterion, at) => {
+      const share = active.find((each) => each.criterion === criterion.criterion)?.share;
+      return {
+        criterion,
+        words: CRITERIA[criterion.criterion],
+        share: share === undefined ? 'left out' : `${shareInWords(share)} of the fit`,
+        fault: this.faults().get(`criteria.${at}.weight`) ?? '',
+        fields: (PARAMETERS[criterion.criterion] ?? []).map((parameter) => ({
+          ...parameter,
+          value: (criterion as unknown as Record<string, number>)[parameter.key] ?? Number.NaN,
+          fault: this.faults().get(`criteria.${at}.${parameter.key}`) ?? '',
+        })),
+      };
+    });
+  });
 
   protected weigh(criterion: CriterionSetting, weight: number): void {
     this.changed.emit({ ...criterion, weight });
   }
 
-  protected type(criterion: CriterionSetting, key: string, event: Event): void {
-    const text = (event.target as HTMLInputElement).value.trim();
-    this.changed.emit({ ...criterion, [key]: Number(text || 'NaN') } as CriterionSetting);
+  protected type(criterion: CriterionSetting, key: string, value: number | null): void {
+    this.changed.emit({ ...criterion, [key]: value } as CriterionSetting);
   }
 }

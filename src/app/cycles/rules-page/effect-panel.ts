@@ -5,7 +5,7 @@ import { grouped } from '../../ui/format/plural-pipe';
 
 /** Narrow cards show half as many bars, each twice as wide. */
 const JOINED = 2;
-const BAR_FIT = (10_000 / FIT_BINS) * JOINED;
+const BAR_POINTS = (100 / FIT_BINS) * JOINED;
 
 /** What the settings do to the applicants as they are; the last numbers stay while new ones are computed. */
 @Component({
@@ -41,8 +41,8 @@ export class EffectPanel {
   protected readonly bins = computed(() => {
     const counts = this.effects()?.distribution ?? [];
     return Array.from({ length: FIT_BINS / JOINED }, (_, at) => ({
-      from: at * BAR_FIT,
-      to: (at + 1) * BAR_FIT,
+      from: at * BAR_POINTS,
+      to: (at + 1) * BAR_POINTS,
       count: counts.slice(at * JOINED, (at + 1) * JOINED).reduce((sum, each) => sum + each, 0),
     }));
   });

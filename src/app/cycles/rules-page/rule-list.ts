@@ -1,6 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import { MatFormFieldModule } from '@angular/material/form-field';
-import { MatInput } from '@angular/material/input';
 import { MatSelectModule } from '@angular/material/select';
 import { MatSlideToggle } from '@angular/material/slide-toggle';
 import { RULES } from '../../../../shared/matching/catalogue';
@@ -8,6 +7,7 @@ import type { RuleEffects } from '../../../../shared/matching/effects-contract';
 import type { RuleSetting } from '../../../../shared/matching/matching-contract';
 import { LanguageLevel } from '../../../../shared/profiles/profiles-contract';
 import { counted } from '../../ui/format/plural-pipe';
+import { NumberField } from './number-field';
 
 interface Parameter {
   key: string;
@@ -34,7 +34,7 @@ const PARAMETERS: Partial<Record<RuleSetting['rule'], readonly Parameter[]>> = {
 /** The rules: on or off, their numbers, and what each does on its own. */
 @Component({
   selector: 'app-rule-list',
-  imports: [MatFormFieldModule, MatInput, MatSelectModule, MatSlideToggle],
+  imports: [MatFormFieldModule, MatSelectModule, MatSlideToggle, NumberField],
   templateUrl: './rule-list.html',
   styleUrl: './rules-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -52,30 +52,29 @@ export class RuleList {
     label: level === 'first' ? 'First language' : level,
   }));
   protected readonly entries = computed(() =>
-    this.rules().map((rule, at) => ({
-      rule,
-      words: RULES[rule.rule],
-      effect: this.effectOf(rule.rule),
-      fields: (PARAMETERS[rule.rule] ?? []).map((parameter) => {
-        const value = (rule as unknown as Record<string, number | null>)[parameter.key] ?? null;
-        return {
-          ...parameter,
-          value: value === null ? '' : String(parameter.hundredths ? value / 100 : value),
-          fault: this.faults().get(`rules.${at}.${parameter.key}`) ?? '',
-        };
-      }),
-    })),
+    this.rules().map((rule, at) => {
+      const fields = (PARAMETERS[rule.rule] ?? []).map((parameter) => ({
+        ...parameter,
+        value: (rule as unknown as Record<string, number | null>)[parameter.key] ?? null,
+        fault: this.faults().get(`rules.${at}.${parameter.key}`) ?? '',
+      }));
+      return {
+        rule,
+        words: RULES[rule.rule],
+        effect: rule.on ? this.effectOf(rule.rule) : '',
+        fields,
+        // A rule that is switched off with a wrong number keeps its field, or nobody would see why saving waits.
+        faulty: fields.some((field) => field.fault !== ''),
+      };
+    }),
   );
 
   protected switchOn(rule: RuleSetting, on: boolean): void {
     this.changed.emit({ ...rule, on });
   }
 
-  protected type(rule: RuleSetting, parameter: Parameter, event: Event): void {
-    const text = (event.target as HTMLInputElement).value.trim();
-    const number = text === '' && parameter.optional ? null : Number(text || 'NaN');
-    const value = number !== null && parameter.hundredths ? Math.round(number * 100) : number;
-    this.changed.emit({ ...rule, [parameter.key]: value } as RuleSetting);
+  protected type(rule: RuleSetting, key: string, value: number | null): void {
+    this.changed.emit({ ...rule, [key]: value } as RuleSetting);
   }
 
   protected choose(rule: RuleSetting, level: LanguageLevel): void {

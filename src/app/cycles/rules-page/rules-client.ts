@@ -1,6 +1,6 @@
 import { HttpClient, httpResource } from '@angular/common/http';
 import { inject, Injectable, type Signal } from '@angular/core';
-import type { Observable } from 'rxjs';
+import { map, type Observable } from 'rxjs';
 import { CycleSettings, SettingsHistory } from '../../../../shared/cycles/cycles-contract';
 import type { RuleEffects } from '../../../../shared/matching/effects-contract';
 import type { MatchingSettings } from '../../../../shared/matching/matching-contract';
@@ -19,9 +19,9 @@ export class RulesClient {
   }
 
   save(cycleId: string, settings: MatchingSettings, version: number): Observable<CycleSettings> {
-    return this.http.put<CycleSettings>(`/api/cycles/${cycleId}/settings`, settings, {
-      headers: { 'if-match': `"${version}"` },
-    });
+    return this.http
+      .put(`/api/cycles/${cycleId}/settings`, settings, { headers: { 'if-match': `"${version}"` } })
+      .pipe(map((saved) => CycleSettings.parse(saved)));
   }
 
   effects(cycleId: string, settings: MatchingSettings): Observable<RuleEffects> {

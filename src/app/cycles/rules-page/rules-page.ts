@@ -1,23 +1,18 @@
-import {
-  ChangeDetectionStrategy,
-  Component,
-  computed,
-  effect,
-  inject,
-  input,
-  linkedSignal,
-  signal,
-} from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, input, linkedSignal, signal } from '@angular/core';
 import { takeUntilDestroyed, toObservable } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
-import { MatFormFieldModule } from '@angular/material/form-field';
-import { MatInput } from '@angular/material/input';
 import { MatRadioModule } from '@angular/material/radio';
-import { catchError, debounceTime, filter, of, switchMap, tap } from 'rxjs';
+import { catchError, EMPTY, type Observable, switchMap, tap, timer } from 'rxjs';
 import { CycleSettings } from '../../../../shared/cycles/cycles-contract';
 import { mayEditSettings } from '../../../../shared/cycles/phase-rules';
 import type { RuleEffects } from '../../../../shared/matching/effects-contract';
-import { Aim, AIM_LABEL, type MatchingSettings } from '../../../../shared/matching/matching-contract';
+import {
+  Aim,
+  AIM_LABEL,
+  type CriterionSetting,
+  type MatchingSettings,
+  type RuleSetting,
+} from '../../../../shared/matching/matching-contract';
 import { CycleStore } from '../../core/cycle-store';
 import { MomentPipe } from '../../core/moments';
 import { Notices } from '../../core/notices';
@@ -27,17 +22,13 @@ import { Loading } from '../../ui/load-state/loading';
 import { PageHeader } from '../../ui/page-header/page-header';
 import { CriterionList } from './criterion-list';
 import { EffectPanel } from './effect-panel';
+import { FurtherSettings } from './further-settings';
 import { RuleList } from './rule-list';
 import { RulesClient } from './rules-client';
-import {
-  differencesOf,
-  faultsOfSettings,
-  groupsToText,
-  sameSettings,
-  textToGroups,
-  withCriterion,
-  withRule,
-} from './settings-changes';
+import { sameSettings, withCriterion, withRule } from './settings-changes';
+import { faultsOfSettings } from './settings-faults';
+import { SettingsHistory } from './settings-history';
+import { StaleNotice } from './stale-notice';
 
 const PAUSE_MS = 300;
 
@@ -47,15 +38,16 @@ const PAUSE_MS = 300;
   imports: [
     CriterionList,
     EffectPanel,
+    FurtherSettings,
     LoadProblem,
     Loading,
     MatButton,
-    MatFormFieldModule,
-    MatInput,
     MatRadioModule,
     MomentPipe,
     PageHeader,
     RuleList,
+    SettingsHistory,
+    StaleNotice,
   ],
   templateUrl: './rules-page.html',
   styleUrl: './rules-page.scss',
@@ -92,41 +84,25 @@ export class RulesPage {
     const [saved, draft] = [this.saved(), this.draft()];
     return saved !== null && draft !== null && !sameSettings(saved.settings, draft);
   });
-  protected readonly groups = computed(() => groupsToText(this.saved()?.settings.employerGroups ?? []));
-  protected readonly theirDifferences = computed(() => {
-    const [theirs, draft] = [this.theirs(), this.draft()];
-    return theirs && draft ? differencesOf(theirs.settings, draft) : [];
+  /** Empty where all that stands here is saved. */
+  protected readonly keeping = computed(() => {
+    if (this.busy()) return 'Saving …';
+    if (!this.dirty() && this.faults().size === 0) return '';
+    return this.faults().size > 0
+      ? 'Not saved: at least one field has to be put right first'
+      : 'Changes are not saved yet';
   });
-  protected readonly versions = computed(() => {
-    const versions = this.history.hasValue() ? this.history.value().versions : [];
-    return versions.map((version, at) => {
-      const before = versions[at + 1];
-      return { ...version, changes: before ? differencesOf(before.settings, version.settings) : [] };
-    });
-  });
+  private readonly valid = computed(() => (this.faults().size === 0 ? this.draft() : null));
 
   constructor() {
-    // Whoever leaves a half-typed number keeps the last effect on the screen.
-    effect(() => {
-      if (this.faults().size > 0) this.effectState.set('Waits until every field is right');
-    });
-    toObservable(this.draft)
+    toObservable(this.valid)
       .pipe(
-        filter((draft) => draft !== null && this.faults().size === 0),
-        tap(() => this.effectState.set('Computing …')),
-        debounceTime(PAUSE_MS),
-        switchMap((draft) =>
-          this.client.effects(this.cycleId(), draft!).pipe(
-            catchError((error: unknown) => {
-              this.effectState.set(problemOf(error).title);
-              return of(null);
-            }),
-          ),
-        ),
+        tap((settings) => this.effectState.set(this.waiting(settings))),
+        // The pause stands inside: a further change also drops the request that is under way.
+        switchMap((settings) => (settings ? timer(PAUSE_MS).pipe(switchMap(() => this.effectOf(settings))) : EMPTY)),
         takeUntilDestroyed(),
       )
       .subscribe((found) => {
-        if (!found) return;
         this.effects.set(found);
         this.effectState.set('Of the applicants admitted now');
       });
@@ -141,40 +117,14 @@ export class RulesPage {
     if (draft) this.draft.set({ ...draft, ...change });
   }
 
-  protected readonly changeRule = (rule: Parameters<typeof withRule>[1]): void => {
+  protected changeRule(rule: RuleSetting): void {
     const draft = this.draft();
     if (draft) this.draft.set(withRule(draft, rule));
-  };
+  }
 
-  protected readonly changeCriterion = (criterion: Parameters<typeof withCriterion>[1]): void => {
+  protected changeCriterion(criterion: CriterionSetting): void {
     const draft = this.draft();
     if (draft) this.draft.set(withCriterion(draft, criterion));
-  };
-
-  protected points(event: Event): number {
-    const text = (event.target as HTMLInputElement).value.trim();
-    return Math.round(Number(text || 'NaN') * 100);
-  }
-
-  protected typeCharge(place: number, event: Event): void {
-    const draft = this.draft();
-    if (!draft) return;
-    const value = this.points(event);
-    this.change({ loadCharges: draft.loadCharges.map((charge, at) => (at === place ? value : charge)) });
-  }
-
-  /** "1st place", "3rd place on" */
-  protected chargeLabel(place: number, last: boolean): string {
-    const ordinal = ['1st', '2nd', '3rd', '4th', '5th', '6th'][place];
-    return last ? `${ordinal} place on` : `${ordinal} place`;
-  }
-
-  protected number(event: Event): number {
-    return Number((event.target as HTMLInputElement).value.trim() || 'NaN');
-  }
-
-  protected typeGroups(event: Event): void {
-    this.change({ employerGroups: textToGroups((event.target as HTMLTextAreaElement).value) });
   }
 
   protected undo(): void {
@@ -189,30 +139,54 @@ export class RulesPage {
     this.busy.set(true);
     this.refusal.set('');
     this.client.save(this.cycleId(), draft, version).subscribe({
-      next: (saved) => this.take(saved),
-      error: (error: unknown) => {
-        const problem = problemOf(error);
-        this.busy.set(false);
-        const current = problem.code === 'stale' ? CycleSettings.safeParse(problem.current) : null;
-        if (current?.success) this.theirs.set(current.data);
-        else this.refusal.set([problem.title, problem.detail].filter(Boolean).join('. '));
+      next: (saved) => {
+        // What was typed while the answer was on its way stays, unsaved.
+        const later = this.draft() === draft ? null : this.draft();
+        this.begin(saved);
+        if (later) this.draft.set(later);
+        this.notices.say('Saved. Runs from now on use these rules and criteria.');
       },
+      error: (error: unknown) => this.refuse(error),
     });
-  }
-
-  protected take(settings: CycleSettings): void {
-    this.busy.set(false);
-    this.theirs.set(null);
-    this.saved.set(settings);
-    this.history.reload();
-    this.store.reload();
-    this.notices.say('Saved. Runs from now on use these rules and criteria.');
   }
 
   protected takeTheirs(): void {
     const theirs = this.theirs();
     if (!theirs) return;
+    this.begin(theirs);
+    this.notices.say('Your changes are set aside. These are the settings as they are saved.');
+  }
+
+  private begin(saved: CycleSettings): void {
+    this.busy.set(false);
     this.theirs.set(null);
-    this.saved.set(theirs);
+    this.saved.set(saved);
+    this.history.reload();
+    this.store.reload();
+  }
+
+  private refuse(error: unknown): void {
+    const problem = problemOf(error);
+    this.busy.set(false);
+    const current = problem.code === 'stale' ? CycleSettings.safeParse(problem.current) : null;
+    if (current?.success) this.theirs.set(current.data);
+    else this.refusal.set([problem.title, problem.detail].filter(Boolean).join('. '));
+    // The phase may have moved on: then the fields lock.
+    if (problem.code === 'conflict') this.store.reload();
+  }
+
+  private waiting(settings: MatchingSettings | null): string {
+    if (settings) return 'Computing …';
+    return this.draft() ? 'Waits until every field is right' : '';
+  }
+
+  /** Where it fails the last numbers stay, and the sentence says why. */
+  private effectOf(settings: MatchingSettings): Observable<RuleEffects> {
+    return this.client.effects(this.cycleId(), settings).pipe(
+      catchError((error: unknown) => {
+        this.effectState.set(problemOf(error).title);
+        return EMPTY;
+      }),
+    );
   }
 }

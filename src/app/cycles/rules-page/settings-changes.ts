@@ -3,9 +3,10 @@ import { CRITERIA, RULES, ruleInWords } from '../../../../shared/matching/catalo
 import {
   AIM_LABEL,
   type CriterionSetting,
-  MatchingSettings,
+  type MatchingSettings,
   type RuleSetting,
 } from '../../../../shared/matching/matching-contract';
+import { fitInWords } from '../../ui/format/fit-pipe';
 
 export const withRule = (settings: MatchingSettings, changed: RuleSetting): MatchingSettings => ({
   ...settings,
@@ -35,39 +36,54 @@ export const textToGroups = (text: string): string[][] =>
 export const sameSettings = (a: MatchingSettings, b: MatchingSettings): boolean =>
   JSON.stringify(a) === JSON.stringify(b);
 
-/** Sentences beside fields, by the path of the field ("rules.5.min"). */
-export function faultsOfSettings(settings: MatchingSettings): ReadonlyMap<string, string> {
-  const result = MatchingSettings.safeParse(settings);
-  if (result.success) return new Map();
-  return new Map(result.error.issues.map((issue) => [issue.path.join('.'), issue.message]));
-}
-
-const onOff = (rule: RuleSetting): string => (rule.on ? ruleInWords(rule) : 'off');
-
 /** What differs between two settings, a line each. */
 export function differencesOf(before: MatchingSettings, after: MatchingSettings): string[] {
-  const lines: string[] = [];
-  if (before.aim !== after.aim) lines.push(`Aim: ${AIM_LABEL[before.aim]} → ${AIM_LABEL[after.aim]}`);
-  for (const rule of after.rules) {
-    const earlier = before.rules.find((each) => each.rule === rule.rule);
-    if (earlier && JSON.stringify(earlier) !== JSON.stringify(rule))
-      lines.push(`${RULES[rule.rule].label}: ${onOff(earlier)} → ${onOff(rule)}`);
-  }
-  for (const criterion of after.criteria) {
-    const earlier = before.criteria.find((each) => each.criterion === criterion.criterion);
-    if (!earlier || JSON.stringify(earlier) === JSON.stringify(criterion)) continue;
-    const label = CRITERIA[criterion.criterion].label;
-    lines.push(
-      earlier.weight === criterion.weight
-        ? `${label}: its numbers changed`
-        : `${label}: weight ${earlier.weight} → ${criterion.weight}`,
-    );
-  }
-  if (before.leftOutBonus !== after.leftOutBonus)
-    lines.push(`Bonus: ${before.leftOutBonus / 100} → ${after.leftOutBonus / 100}`);
-  if (String(before.loadCharges) !== String(after.loadCharges)) lines.push('Charges for further places changed');
+  const lines = [...rulesThatDiffer(before, after), ...criteriaThatDiffer(before, after)];
+  const further = (label: string, earlier: string, now: string): void => {
+    if (earlier !== now) lines.push(`${label}: ${earlier} → ${now}`);
+  };
+  if (before.aim !== after.aim) lines.unshift(`Aim: ${AIM_LABEL[before.aim]} → ${AIM_LABEL[after.aim]}`);
+  further('Bonus for those left out last time', fitInWords(before.leftOutBonus), fitInWords(after.leftOutBonus));
+  further('Charges for a mentor’s places', chargesInWords(before), chargesInWords(after));
   if (groupsToText(before.employerGroups) !== groupsToText(after.employerGroups))
     lines.push('Groups of companies changed');
-  if (before.seed !== after.seed) lines.push(`Seed: ${before.seed} → ${after.seed}`);
+  further('Seed', String(before.seed), String(after.seed));
   return lines;
+}
+
+const chargesInWords = (settings: MatchingSettings): string => settings.loadCharges.map(fitInWords).join(', ');
+
+function rulesThatDiffer(before: MatchingSettings, after: MatchingSettings): string[] {
+  return after.rules.flatMap((rule) => {
+    const earlier = before.rules.find((each) => each.rule === rule.rule);
+    if (!earlier || JSON.stringify(earlier) === JSON.stringify(rule)) return [];
+    const label = RULES[rule.rule].label;
+    if (!earlier.on && !rule.on) return [`${label}: still off, its numbers changed`];
+    return [`${label}: ${onOff(earlier)} → ${onOff(rule)}`];
+  });
+}
+
+/** A rule without parameters has no more words than its name, which stands before already. */
+function onOff(rule: RuleSetting): string {
+  if (!rule.on) return 'off';
+  const words = ruleInWords(rule);
+  return words === RULES[rule.rule].label ? 'on' : words;
+}
+
+function criteriaThatDiffer(before: MatchingSettings, after: MatchingSettings): string[] {
+  return after.criteria.flatMap((criterion) => {
+    const earlier = before.criteria.find((each) => each.criterion === criterion.criterion);
+    if (!earlier || JSON.stringify(earlier) === JSON.stringify(criterion)) return [];
+    const parts: string[] = [];
+    if (earlier.weight !== criterion.weight) parts.push(`weight ${earlier.weight} → ${criterion.weight}`);
+    const [was, is] = [parametersInWords(earlier), parametersInWords(criterion)];
+    if (was !== is) parts.push(`${was} → ${is}`);
+    return [`${CRITERIA[criterion.criterion].label}: ${parts.join('; ')}`];
+  });
+}
+
+function parametersInWords(setting: CriterionSetting): string {
+  if (setting.criterion === 'weekly-overlap')
+    return `${setting.wanted} wanted ${setting.wanted === 1 ? 'time' : 'times'}`;
+  return setting.criterion === 'years' ? `${setting.from} to ${setting.to} years` : '';
 }
