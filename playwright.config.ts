@@ -8,10 +8,12 @@ export default defineConfig({
   workers: 1,
   fullyParallel: false,
   retries: 0,
-  timeout: 90_000,
+  // One test walks every page of a role in two sizes; on a busy machine that takes minutes. What hangs is told by the limits below.
+  timeout: 240_000,
   expect: { timeout: 15_000 },
   use: {
     baseURL: process.env['BASE_URL'] ?? 'http://localhost:4000',
+    navigationTimeout: 45_000,
     trace: 'retain-on-failure',
     launchOptions: {
       executablePath: process.env['CHROMIUM'] ?? '/usr/bin/chromium',
